@@ -1,0 +1,5 @@
+/** All migrations in order. A new one is added at the end; one that was released is never changed. */
+import type { Migration } from '../migrate.ts';
+import { migration as firstTables } from './0001-first-tables.ts';
+
+export const migrations: Migration[] = [firstTables];
