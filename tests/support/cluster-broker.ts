@@ -27,6 +27,7 @@ interface ReadyCluster {
  */
 export async function startClusterBroker(): Promise<ClusterBroker> {
   let ready: Promise<ReadyCluster> | null = null;
+  let migrated: Promise<void> | null = null;
   let queue: Promise<unknown> = Promise.resolve();
   let count = 0;
 
@@ -56,8 +57,10 @@ export async function startClusterBroker(): Promise<ClusterBroker> {
     }
     count += 1;
     const name = `test_${count}`;
-    const source = url.searchParams.get('from') === 'nothing' ? 'template0' : template;
+    const isBare = url.searchParams.get('from') === 'nothing';
     return inTurn(async ({ admin, cluster }) => {
+      if (!isBare) await (migrated ??= makeTemplate({ admin, cluster }));
+      const source = isBare ? 'template0' : template;
       await admin.query(`create database "${name}" template "${source}"`);
       return { name, url: cluster.urlOf(name) };
     });
@@ -70,10 +73,10 @@ export async function startClusterBroker(): Promise<ClusterBroker> {
       server.closeAllConnections();
       await new Promise((resolve) => server.close(resolve));
       await queue;
-      if (!ready) return;
-      const { admin, cluster } = await ready;
-      await admin.end();
-      await cluster.close();
+      const started = await ready?.catch(() => null);
+      if (!started) return;
+      await started.admin.end();
+      await started.cluster.close();
     },
   };
 }
@@ -83,9 +86,12 @@ async function startCluster(): Promise<ReadyCluster> {
   const admin = new Client({ connectionString: cluster.urlOf('postgres') });
   admin.on('error', () => undefined);
   await admin.connect();
+  return { cluster, admin };
+}
+
+async function makeTemplate({ admin, cluster }: ReadyCluster): Promise<void> {
   await admin.query(`create database "${template}"`);
   await migrateInChild(cluster.urlOf(template));
-  return { cluster, admin };
 }
 
 /** The same command as `npm run migrate`, so that the tests run what a person runs. */
