@@ -11,7 +11,7 @@ export default {
       colors: {
         ink: { DEFAULT: '#1d2b36', soft: '#3f5261', faint: '#5b6d7a' },
         paper: { DEFAULT: '#f5f8f8', raised: '#ffffff', sunk: '#e8eeee' },
-        line: { DEFAULT: '#cfdadb', strong: '#9fb0b4' },
+        line: { DEFAULT: '#cfdadb', strong: '#74898f' },
         teal: { DEFAULT: '#0f6b6b', strong: '#0a5252', wash: '#dcefed' },
         amber: { DEFAULT: '#8a5a00', strong: '#6b4500', wash: '#fbeecb' },
         rust: { DEFAULT: '#9a3b1e', strong: '#7a2c14', wash: '#f8e2d9' },
