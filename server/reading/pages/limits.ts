@@ -21,3 +21,18 @@ export const defaultReadingLimits: ReadingLimits = {
 export function withDefaultLimits(limits: Partial<ReadingLimits> = {}): ReadingLimits {
   return { ...defaultReadingLimits, ...limits };
 }
+
+/** The reading limits among an application's settings. */
+export function readingLimitsOf(settings: {
+  maxPages: number;
+  maxPixels: number;
+  maxFileBytes: number;
+  pageTimeoutMs: number;
+}): ReadingLimits {
+  return {
+    maxPages: settings.maxPages,
+    maxPixels: settings.maxPixels,
+    maxBytes: settings.maxFileBytes,
+    pageTimeoutMs: settings.pageTimeoutMs,
+  };
+}

@@ -2,7 +2,6 @@
 import type { InkPatch } from './components.ts';
 import { findInkPatches } from './components.ts';
 import type { Grey } from './raster.ts';
-import { shrinkTo } from './raster.ts';
 
 /** A rectangle in pixels. */
 export interface Rect {
@@ -25,16 +24,34 @@ const INK_BELOW = 150;
 
 /** Measures an evened-out page; all results in its own pixels. */
 export function measurePage(flat: Grey): PageShape {
-  const factor = Math.max(1, Math.floor(Math.max(flat.width, flat.height) / 1700));
-  const small = factor === 1 ? flat : shrinkTo(flat, 1700);
-  const scale = flat.width / small.width;
-  const patches = findInkPatches(small, INK_BELOW);
-  const marks = patches.filter((patch) => isMark(patch, small));
+  const patches = findInkPatches(flat, INK_BELOW);
+  const marks = patches.filter((patch) => isMark(patch, flat));
   const letters = marks.filter(isLetterLike);
   return {
-    blank: isBlank(marks, small),
-    letterHeight: letters.length < 25 ? null : findMedianHeight(letters) * scale,
-    content: findContent(marks, small, scale, flat),
+    blank: isBlank(marks, flat),
+    letterHeight: letters.length < 25 ? null : findTypicalHeight(letters),
+    content: findContent(marks, flat),
+  };
+}
+
+/** The same shape in pixels `factor` times as fine, kept within a page of the given size. */
+export function scaleShape(
+  shape: PageShape,
+  factor: number,
+  width: number,
+  height: number,
+): PageShape {
+  const left = Math.max(0, Math.floor(shape.content.left * factor));
+  const top = Math.max(0, Math.floor(shape.content.top * factor));
+  return {
+    blank: shape.blank,
+    letterHeight: shape.letterHeight === null ? null : shape.letterHeight * factor,
+    content: {
+      left,
+      top,
+      width: Math.max(1, Math.min(width - left, Math.ceil(shape.content.width * factor))),
+      height: Math.max(1, Math.min(height - top, Math.ceil(shape.content.height * factor))),
+    },
   };
 }
 
@@ -43,7 +60,7 @@ function isMark(patch: InkPatch, page: Grey): boolean {
   const width = patch.right - patch.left;
   const height = patch.bottom - patch.top;
   if (patch.area < 5 || (width < 3 && height < 3)) return false;
-  const edge = Math.round(Math.min(page.width, page.height) * 0.012);
+  const edge = Math.round(Math.min(page.width, page.height) * 0.01);
   const touches =
     patch.left <= edge ||
     patch.top <= edge ||
@@ -57,12 +74,14 @@ function isMark(patch: InkPatch, page: Grey): boolean {
 function isLetterLike(patch: InkPatch): boolean {
   const width = patch.right - patch.left;
   const height = patch.bottom - patch.top;
-  return height >= 5 && height <= 90 && width >= 2 && width < height * 3 && width * 8 > height;
+  return height >= 4 && height <= 80 && width >= 2 && width < height * 3 && width * 8 > height;
 }
 
-function findMedianHeight(patches: InkPatch[]): number {
+/** Mean of the middle half of all heights: finer than a median of whole pixels. */
+function findTypicalHeight(patches: InkPatch[]): number {
   const heights = patches.map((patch) => patch.bottom - patch.top).sort((a, b) => a - b);
-  return heights[heights.length >> 1] ?? 0;
+  const middle = heights.slice(heights.length >> 2, Math.ceil(heights.length * 0.75));
+  return middle.reduce((sum, height) => sum + height, 0) / middle.length;
 }
 
 function isBlank(marks: InkPatch[], page: Grey): boolean {
@@ -75,8 +94,8 @@ function isBlank(marks: InkPatch[], page: Grey): boolean {
   return sized < 8 && inked < page.width * page.height * 0.0012;
 }
 
-function findContent(marks: InkPatch[], small: Grey, scale: number, flat: Grey): Rect {
-  let [left, top, right, bottom] = [small.width, small.height, 0, 0];
+function findContent(marks: InkPatch[], page: Grey): Rect {
+  let [left, top, right, bottom] = [page.width, page.height, 0, 0];
   for (const mark of marks) {
     left = Math.min(left, mark.left);
     top = Math.min(top, mark.top);
@@ -84,15 +103,15 @@ function findContent(marks: InkPatch[], small: Grey, scale: number, flat: Grey):
     bottom = Math.max(bottom, mark.bottom);
   }
   if (right <= left || bottom <= top) {
-    return { left: 0, top: 0, width: flat.width, height: flat.height };
+    return { left: 0, top: 0, width: page.width, height: page.height };
   }
-  const margin = 18;
-  const x = Math.max(0, Math.floor((left - margin) * scale));
-  const y = Math.max(0, Math.floor((top - margin) * scale));
+  const margin = 16;
+  const x = Math.max(0, left - margin);
+  const y = Math.max(0, top - margin);
   return {
     left: x,
     top: y,
-    width: Math.min(flat.width, Math.ceil((right + margin) * scale)) - x,
-    height: Math.min(flat.height, Math.ceil((bottom + margin) * scale)) - y,
+    width: Math.min(page.width, right + margin) - x,
+    height: Math.min(page.height, bottom + margin) - y,
   };
 }

@@ -1,8 +1,8 @@
 /** From a page as it lies in the file to an evened-out, upright page and the maps between the two. */
 import { flattenLight } from './flatten.ts';
 import { liesOnSide } from './orientation.ts';
-import { measurePage, type PageShape } from './page-shape.ts';
-import { countGreys, toGrey, type Grey, type Pixels } from './raster.ts';
+import { measurePage, scaleShape, type PageShape } from './page-shape.ts';
+import { countGreys, toGrey, turnGrey, type Grey, type Pixels } from './raster.ts';
 import { findSheet, type Corners } from './sheet.ts';
 import { findSkew } from './skew.ts';
 import {
@@ -19,12 +19,17 @@ import {
 
 export type QuarterTurn = 0 | 90 | 180 | 270;
 
-/** A page made ready for reading. Sizes are those of the upright page in source pixels. */
+/** A page made ready for reading. `width` and `height` are those of the upright page in source pixels. */
 export interface PreparedPage {
   source: Pixels;
-  /** Evened-out page before turning and straightening, in the flat frame. */
-  flat: Grey;
-  /** Flat frame to source: undoes a photograph's perspective. */
+  grey: Grey;
+  /** The page on a small scale, evened out, as it lies. */
+  small: Grey;
+  /** Pixels of `small` for one of the frame. */
+  smallScale: number;
+  /** The page without perspective, in source pixels, as it lies. */
+  frame: Size;
+  /** Frame to source. */
   toSource: PlaneMap;
   turned: QuarterTurn;
   skew: number;
@@ -32,52 +37,75 @@ export interface PreparedPage {
   height: number;
   shape: PageShape;
   photographed: boolean;
+  twoTone: boolean;
 }
 
-/** Straightens, evens out and measures one page. */
+interface Size {
+  width: number;
+  height: number;
+}
+
+/** Long side of the small copy on which everything but the letters themselves is measured. */
+const SMALL_SIDE = 1600;
+
+/** Finds sheet, direction, slope and print of one page; the full picture is sampled only once, later. */
 export function preparePage(source: Pixels): PreparedPage {
-  const corners = isTwoTone(source) ? null : findSheet(source);
-  const { rectified, toSource } = corners
-    ? rectify(source, corners)
-    : { rectified: toGrey(source), toSource: identityMap };
-  const flat = isTwoTone(source) ? rectified : flattenLight(rectified);
-  const turned: QuarterTurn = liesOnSide(flat) ? 90 : 0;
-  return finishPreparation({ source, flat, toSource, turned, photographed: corners !== null });
+  const twoTone = isTwoTone(source);
+  const grey = toGrey(source);
+  const corners = twoTone ? null : findSheet(source);
+  const frame = corners ? measureCorners(corners) : { width: grey.width, height: grey.height };
+  const toSource = corners ? mapToCorners(corners, frame.width, frame.height) : identityMap;
+  const smallScale = Math.min(1, SMALL_SIDE / Math.max(frame.width, frame.height));
+  const sampled = sampleGrey(
+    grey,
+    composeMaps(toSource, scaleAndShift(smallScale, 0, 0)),
+    Math.max(1, Math.round(frame.width * smallScale)),
+    Math.max(1, Math.round(frame.height * smallScale)),
+  );
+  const small = twoTone ? sampled : flattenLight(sampled);
+  const turned: QuarterTurn = liesOnSide(small) ? 90 : 0;
+  const photographed = corners !== null;
+  return straighten(
+    { source, grey, small, smallScale, frame, toSource, photographed, twoTone },
+    turned,
+  );
 }
 
-/** The same page turned half round. */
-export function turnOver(page: PreparedPage): PreparedPage {
-  const turned = ((page.turned + 180) % 360) as QuarterTurn;
-  return finishPreparation({ ...page, turned });
+/** The same page turned clockwise by another quarter, half or three quarters. */
+export function turnFurther(page: PreparedPage, by: QuarterTurn): PreparedPage {
+  return straighten(page, ((page.turned + by) % 360) as QuarterTurn);
 }
 
-function finishPreparation(page: {
-  source: Pixels;
-  flat: Grey;
-  toSource: PlaneMap;
-  turned: QuarterTurn;
-  photographed: boolean;
-}): PreparedPage {
-  const { flat, turned } = page;
+type LyingPage = Omit<PreparedPage, 'turned' | 'skew' | 'width' | 'height' | 'shape'>;
+
+function straighten(page: LyingPage, turned: QuarterTurn): PreparedPage {
+  const { small, smallScale, frame } = page;
   const swapped = turned === 90 || turned === 270;
-  const width = swapped ? flat.height : flat.width;
-  const height = swapped ? flat.width : flat.height;
-  const upright =
-    turned === 0
-      ? flat
-      : sampleGrey(flat, undoTurn(turned, flat.width, flat.height), width, height);
+  const width = swapped ? frame.height : frame.width;
+  const height = swapped ? frame.width : frame.height;
+  const upright = turnGrey(small, turned);
   const skew = findSkew(upright);
   const straight =
-    skew === 0 ? upright : sampleGrey(upright, undoSkew(skew, width, height), width, height);
-  return { ...page, skew, width, height, shape: measurePage(straight) };
+    skew === 0
+      ? upright
+      : sampleGrey(
+          upright,
+          undoSkew(skew, upright.width, upright.height),
+          upright.width,
+          upright.height,
+        );
+  const shape = scaleShape(measurePage(straight), 1 / smallScale, width, height);
+  return { ...page, turned, skew, width, height, shape };
 }
 
-/** Upright page to flat frame. */
-export function mapUprightToFlat(page: PreparedPage): PlaneMap {
-  return composeMaps(
-    undoTurn(page.turned, page.flat.width, page.flat.height),
-    undoSkew(page.skew, page.width, page.height),
+/** Upright page to source. */
+export function mapUprightToSource(page: PreparedPage): PlaneMap {
+  const { frame, turned, skew, width, height } = page;
+  const lying = composeMaps(
+    undoTurn(turned, frame.width, frame.height),
+    undoSkew(skew, width, height),
   );
+  return composeMaps(page.toSource, lying);
 }
 
 /** The part of the upright page that holds print, scaled for the engine. */
@@ -89,10 +117,10 @@ export interface ReadingImage {
 }
 
 /** Letters this high (in pixels, median of all marks) are read best and fast. */
-const LETTER_TARGET = 15;
+const LETTER_TARGET = Number(process.env.LT ?? 15);
 const MAX_READING_PIXELS = 9_000_000;
 
-/** Cuts out and scales what the engine is to read. */
+/** Cuts out, straightens, scales and evens out what the engine is to read. */
 export function makeReadingImage(page: PreparedPage): ReadingImage {
   const { content, letterHeight } = page.shape;
   let scale = letterHeight === null ? 1 : LETTER_TARGET / letterHeight;
@@ -102,8 +130,12 @@ export function makeReadingImage(page: PreparedPage): ReadingImage {
   scale = Math.min(scale, Math.sqrt(MAX_READING_PIXELS / area));
   const width = Math.max(32, Math.round(content.width * scale));
   const height = Math.max(32, Math.round(content.height * scale));
-  const map = composeMaps(mapUprightToFlat(page), scaleAndShift(scale, content.left, content.top));
-  const grey = sampleGrey(page.flat, map, width, height);
+  const map = composeMaps(
+    mapUprightToSource(page),
+    scaleAndShift(scale, content.left, content.top),
+  );
+  const sampled = sampleGrey(page.grey, map, width, height);
+  const grey = page.twoTone ? sampled : flattenLight(sampled);
   return { grey, scale, left: content.left, top: content.top };
 }
 
@@ -120,11 +152,10 @@ export function isTwoTone(pixels: Pixels): boolean {
   return middle < total * 0.002;
 }
 
-function rectify(source: Pixels, corners: Corners): { rectified: Grey; toSource: PlaneMap } {
-  const [a, b, c, d] = corners;
+function measureCorners([a, b, c, d]: Corners): Size {
   const length = (from: Point, to: Point) => Math.hypot(from.x - to.x, from.y - to.y);
-  const width = Math.round(Math.max(length(a, b), length(d, c)));
-  const height = Math.round(Math.max(length(a, d), length(b, c)));
-  const toSource = mapToCorners(corners, width, height);
-  return { rectified: sampleGrey(toGrey(source), toSource, width, height), toSource };
+  return {
+    width: Math.round(Math.max(length(a, b), length(d, c))),
+    height: Math.round(Math.max(length(a, d), length(b, c))),
+  };
 }

@@ -6,16 +6,16 @@ import type { RawPage } from './page-source.ts';
 import { makePictures } from './pictures.ts';
 import {
   makeReadingImage,
-  mapUprightToFlat,
+  mapUprightToSource,
   preparePage,
-  turnOver,
+  turnFurther,
   type PreparedPage,
   type ReadingImage,
 } from './prepare.ts';
 import { findCode } from './qr.ts';
 import { toGrey } from './raster.ts';
 import { assembleLines, joinLines, meanConfidence } from './text-lines.ts';
-import { composeMaps, identityMap } from './warp.ts';
+import { identityMap } from './warp.ts';
 
 /** Under this mean confidence a page may stand on its head: it is read the other way round too. */
 const DOUBT = 0.6;
@@ -24,17 +24,10 @@ const DOUBT = 0.6;
 export async function readPage(raw: RawPage, number: number, engine: Engine): Promise<ReadPage> {
   if (raw.textLayer) return takeTextLayer(raw, raw.textLayer, number);
   let page = preparePage(raw.pixels);
-  const code = findCode(page.flat);
+  const code = findCode(page.small);
   let words: Word[] = [];
-  if (!page.shape.blank) {
-    words = recognise(page, engine);
-    if (meanConfidence(words) < DOUBT || page.turned === 90) {
-      const other = turnOver(page);
-      const otherWords = recognise(other, engine);
-      if (weigh(otherWords) > weigh(words)) [page, words] = [other, otherWords];
-    }
-  }
-  const map = composeMaps(page.toSource, mapUprightToFlat(page));
+  if (!page.shape.blank) [page, words] = readUpright(page, engine);
+  const map = mapUprightToSource(page);
   const pictures = await makePictures(page.source, map, page.width, page.height);
   return {
     ...describeText(number, words),
@@ -44,6 +37,29 @@ export async function readPage(raw: RawPage, number: number, engine: Engine): Pr
     turned: page.turned,
     ...pictures,
   };
+}
+
+/** Reads the page, turning it until its words lie level and are read with confidence. */
+function readUpright(first: PreparedPage, engine: Engine): [PreparedPage, Word[]] {
+  let page = first;
+  let words = recognise(page, engine);
+  if (standOnEnd(words, page)) {
+    page = turnFurther(page, 270);
+    words = recognise(page, engine);
+  }
+  if (meanConfidence(words) < DOUBT || page.turned % 180 !== 0) {
+    const other = turnFurther(page, 180);
+    const otherWords = recognise(other, engine);
+    if (weigh(otherWords) > weigh(words)) return [other, otherWords];
+  }
+  return [page, words];
+}
+
+/** The engine reads lines that run up or down as well: their words are higher than wide. */
+function standOnEnd(words: Word[], page: PreparedPage): boolean {
+  const long = words.filter((word) => word.text.length >= 4 && word.confidence > 0.5);
+  const upended = long.filter(({ box }) => box.h * page.height > box.w * page.width * 1.2);
+  return upended.length > long.length * 0.5;
 }
 
 async function takeTextLayer(raw: RawPage, words: Word[], number: number): Promise<ReadPage> {

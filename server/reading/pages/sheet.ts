@@ -37,8 +37,9 @@ export function findSheet(pixels: Pixels): Corners | null {
   const top = findLines(transposed, 1);
   const bottom = findLines(transposed, -1);
   const best = chooseSides(plane, across, down, { left, right, top, bottom });
-  if (!best) return null;
-  return best.map(({ x, y }) => ({ x: x * factor, y: y * factor })) as Corners;
+  if (!best || !standsOut(plane, best)) return null;
+  const refined = refineCorners(best, across, down);
+  return refined.map(({ x, y }) => ({ x: x * factor, y: y * factor })) as Corners;
 }
 
 function shrinkToPlane(pixels: Pixels): { plane: Plane; factor: number } {
@@ -116,7 +117,8 @@ function findLines(steps: Plane, sign: 1 | -1): Line[] {
         const at = x + whole;
         if (at < 0 || at >= width) continue;
         const value = data[row + at]! * sign;
-        if (value > 4) sums[x] = sums[x]! + value;
+        // Capped, so that a long edge counts for more than a harsh one.
+        if (value > 4) sums[x] = sums[x]! + Math.min(value, 14);
       }
     }
     for (let x = 1; x < width - 1; x++) {
@@ -133,9 +135,48 @@ function findLines(steps: Plane, sign: 1 | -1): Line[] {
         Math.abs(other.at - line.at) < 5 && Math.abs(other.slope - line.slope) * height < 10,
     );
     if (!alike) kept.push(line);
-    if (kept.length >= 9) break;
+    if (kept.length >= 12) break;
   }
   return kept;
+}
+
+/**
+ * Whether what lies around the corners is something else than paper: clearly darker, or a little darker
+ * and free of print. A framed box on a printed page is neither.
+ */
+function standsOut(plane: Plane, corners: Corners): boolean {
+  const { width, height, data } = plane;
+  const inside: number[] = [];
+  const outside: number[] = [];
+  for (let y = 0; y < height; y += 2) {
+    for (let x = 0; x < width; x += 2) {
+      const depth = findDepth(corners, x, y);
+      // The shadow that a sheet throws belongs to neither.
+      if (depth >= 0) inside.push(data[y * width + x]!);
+      else if (depth < -8) outside.push(data[y * width + x]!);
+    }
+  }
+  inside.sort((a, b) => a - b);
+  outside.sort((a, b) => a - b);
+  const at = (sorted: number[], share: number) => sorted[Math.floor(sorted.length * share)] ?? 0;
+  const ratio = at(outside, 0.8) / Math.max(1, at(inside, 0.8));
+  if (ratio < 0.8) return true;
+  if (ratio >= 0.96) return false;
+  // Paper is even: most of it is about as light as its lightest part. Cloth and wood are not.
+  if (at(outside, 0.5) < 0.88 * at(outside, 0.8)) return true;
+  const dark = outside.filter((value) => value < at(outside, 0.5) - 30).length;
+  return dark < outside.length * 0.004;
+}
+
+/** Distance in pixels from the nearest side, negative outside. */
+function findDepth(corners: Corners, x: number, y: number): number {
+  let depth = Infinity;
+  corners.forEach((from, index) => {
+    const to = corners[(index + 1) % 4]!;
+    const cross = (to.x - from.x) * (y - from.y) - (to.y - from.y) * (x - from.x);
+    depth = Math.min(depth, cross / distance(from, to));
+  });
+  return depth;
 }
 
 interface Sides {
@@ -217,10 +258,53 @@ function scoreCorners(corners: Corners, across: Plane, down: Plane): number {
   let sum = 0;
   for (const side of sides) {
     if (side.step < MIN_STEP || side.cover < MIN_COVER) return 0;
-    sum += Math.min(side.step, 30) * side.cover;
+    sum += Math.min(side.step, 18) * side.cover;
   }
   const area = Math.abs(findArea(corners)) / (across.width * across.height);
-  return sum * (0.6 + area);
+  return sum * (0.3 + area);
+}
+
+/** Moves the ends of each side by up to five pixels to where the step is sharpest. */
+function refineCorners(corners: Corners, across: Plane, down: Plane): Corners {
+  const { width, height } = across;
+  const [a, b, c, d] = corners;
+  const top = refineSide(down, a, b, 1, 'y');
+  const bottom = refineSide(down, d, c, -1, 'y');
+  const left = refineSide(across, a, d, 1, 'x');
+  const right = refineSide(across, b, c, -1, 'x');
+  const refined: Corners = [
+    meet(left, top),
+    meet(right, top),
+    meet(right, bottom),
+    meet(left, bottom),
+  ];
+  return isPlausible(refined, width, height) ? refined : corners;
+}
+
+type Segment = [Point, Point];
+
+function refineSide(steps: Plane, from: Point, to: Point, sign: 1 | -1, axis: 'x' | 'y'): Segment {
+  const shift = (point: Point, by: number): Point =>
+    axis === 'x' ? { x: point.x + by, y: point.y } : { x: point.x, y: point.y + by };
+  let best: Segment = [from, to];
+  let bestStep = -Infinity;
+  for (let one = -5; one <= 5; one += 0.5) {
+    for (let other = -5; other <= 5; other += 0.5) {
+      const segment: Segment = [shift(from, one), shift(to, other)];
+      const { step } = measureSide(steps, segment[0], segment[1], sign);
+      if (step > bestStep) [best, bestStep] = [segment, step];
+    }
+  }
+  return best;
+}
+
+/** Where two sides, made longer if need be, cross. */
+function meet([a, b]: Segment, [c, d]: Segment): Point {
+  const r = { x: b.x - a.x, y: b.y - a.y };
+  const s = { x: d.x - c.x, y: d.y - c.y };
+  const cross = r.x * s.y - r.y * s.x;
+  const t = ((c.x - a.x) * s.y - (c.y - a.y) * s.x) / cross;
+  return { x: a.x + t * r.x, y: a.y + t * r.y };
 }
 
 function measureSide(
