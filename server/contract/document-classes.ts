@@ -464,7 +464,9 @@ export const documentClasses = [
 
 export type ClassId = (typeof documentClasses)[number]['id'];
 export const classIds = documentClasses.map((c) => c.id) as [ClassId, ...ClassId[]];
-export const classIdSchema = z.enum(classIds);
+export const classIdSchema = z.enum(classIds, {
+  error: (issue) => `There is no kind of paper "${String(issue.input)}".`,
+});
 
 const byId = new Map<string, DocumentClass>(documentClasses.map((c) => [c.id, c]));
 

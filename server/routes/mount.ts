@@ -6,6 +6,7 @@ import type { Request, Response, Router } from 'express';
 import type { z } from 'zod';
 import type { BodyOf, Endpoint, ParamsOf, QueryOf, ResponseOf } from '../contract/endpoint.ts';
 import type { Membership, Permission } from '../contract/permissions.ts';
+import type { FieldProblem } from '../contract/problems.ts';
 import { InvalidInputError, NotFoundError, VersionNeededError } from '../errors.ts';
 import { locateHousehold } from '../use-cases/locate-household.ts';
 import {
@@ -114,21 +115,19 @@ function parsePart(schema: z.ZodType | undefined, value: unknown, isPath: boolea
   const parsed = schema.safeParse(value);
   if (parsed.success) return parsed.data;
   if (isPath) throw new NotFoundError();
-  throw new InvalidInputError(
-    parsed.error.issues.map((issue) => ({
-      field: issue.path.join('.'),
-      message: describeIssue(issue),
-    })),
-  );
+  throw new InvalidInputError(parsed.error.issues.flatMap(describeIssue));
 }
 
-function describeIssue(issue: z.core.$ZodIssue): string {
+function describeIssue(issue: z.core.$ZodIssue): FieldProblem[] {
   if (issue.code === 'unrecognized_keys') {
-    return `This name is not known here: ${issue.keys.join(', ')}.`;
+    return issue.keys.map((key) => ({
+      field: [...issue.path, key].join('.'),
+      message: `The name "${key}" is not known here. Leave it out or correct it.`,
+    }));
   }
   const field = issue.path.join('.');
   const sentence = /[.!?]$/.test(issue.message) ? issue.message : `${issue.message}.`;
-  return field ? `${field}: ${sentence}` : sentence;
+  return [{ field, message: field ? `${field}: ${sentence}` : sentence }];
 }
 
 function parseVersion(request: Request): number {

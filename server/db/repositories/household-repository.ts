@@ -115,8 +115,15 @@ export async function takeNumbers(
   return household[kind];
 }
 
-export async function setCalendarTokenHash(householdId: string, hash: string): Promise<void> {
-  await HouseholdModel.update({ calendarTokenHash: hash }, { where: { id: householdId } });
+export async function setCalendarTokenHash(
+  householdId: string,
+  hash: string,
+  transaction: Transaction,
+): Promise<void> {
+  await HouseholdModel.update(
+    { calendarTokenHash: hash },
+    { where: { id: householdId }, transaction },
+  );
 }
 
 export async function findPracticeName(id: string): Promise<string> {

@@ -1,0 +1,103 @@
+/** Scans and how far their reading got. */
+import { Op, QueryTypes, type Transaction } from 'sequelize';
+import { ScanModel, type ScanRow } from '../models/scan-model.ts';
+
+export interface CountedScan extends ScanRow {
+  pagesRead: number;
+  blankPages: number;
+  papers: number;
+}
+
+function requireSequelize() {
+  const { sequelize } = ScanModel;
+  if (!sequelize) throw new Error('No database is connected.');
+  return sequelize;
+}
+
+const countedScans = `
+  select s.id, s.household_id as "householdId", s.box_id as "boxId", s.name, s.media_type as "mediaType",
+    s.bytes, s.sha256, s.status, s.reason, s.page_count as "pageCount", s.attempts,
+    s.created_by as "createdBy", s.created_at as "createdAt", s.read_at as "readAt",
+    (select count(*)::int from pages g where g.scan_id = s.id) as "pagesRead",
+    (select count(*)::int from pages g where g.scan_id = s.id and g.blank) as "blankPages",
+    (select count(*)::int from papers p where p.scan_id = s.id) as papers
+  from scans s`;
+
+export async function listScansOfBox(boxId: string): Promise<CountedScan[]> {
+  return requireSequelize().query<CountedScan>(
+    `${countedScans} where s.box_id = $boxId order by s.created_at desc, s.name`,
+    { bind: { boxId }, type: QueryTypes.SELECT },
+  );
+}
+
+export async function findCountedScan(id: string): Promise<CountedScan | null> {
+  const rows = await requireSequelize().query<CountedScan>(`${countedScans} where s.id = $id`, {
+    bind: { id },
+    type: QueryTypes.SELECT,
+  });
+  return rows[0] ?? null;
+}
+
+export async function findScan(id: string): Promise<ScanRow | null> {
+  const found = await ScanModel.findByPk(id);
+  return found?.get({ plain: true }) ?? null;
+}
+
+/** The scan of a household with these very bytes. */
+export async function findScanByHash(householdId: string, sha256: string): Promise<ScanRow | null> {
+  const found = await ScanModel.findOne({ where: { householdId, sha256 } });
+  return found?.get({ plain: true }) ?? null;
+}
+
+/** Adds a scan; false when the household has these bytes already. */
+export async function insertScan(
+  values: Pick<
+    ScanRow,
+    'id' | 'householdId' | 'boxId' | 'name' | 'mediaType' | 'bytes' | 'sha256' | 'createdBy'
+  >,
+  transaction: Transaction,
+): Promise<boolean> {
+  const [, count] = await requireSequelize().query(
+    `insert into scans (id, household_id, box_id, name, media_type, bytes, sha256, created_by)
+     values ($id, $householdId, $boxId, $name, $mediaType, $bytes, $sha256, $createdBy)
+     on conflict (household_id, sha256) do nothing`,
+    { bind: { ...values }, transaction, type: QueryTypes.INSERT },
+  );
+  return count === 1;
+}
+
+/** Takes a scan up for reading; null when it is read, failed or gone. */
+export async function claimScan(id: string): Promise<ScanRow | null> {
+  const [count] = await ScanModel.update(
+    { status: 'reading', reason: null },
+    { where: { id, status: { [Op.in]: ['waiting', 'reading'] } } },
+  );
+  return count === 1 ? findScan(id) : null;
+}
+
+export async function updateScan(
+  id: string,
+  values: Partial<ScanRow>,
+  transaction?: Transaction,
+): Promise<void> {
+  await ScanModel.update(values, { where: { id }, transaction: transaction ?? null });
+}
+
+/** Puts a failed scan back in the queue; false when it had not failed. */
+export async function requeueScan(id: string, transaction: Transaction): Promise<boolean> {
+  const [count] = await ScanModel.update(
+    { status: 'waiting', reason: null },
+    { where: { id, status: 'failed' }, transaction },
+  );
+  return count === 1;
+}
+
+/** Scans that wait to be read or whose reading was interrupted, oldest first. */
+export async function listUnreadScanIds(): Promise<string[]> {
+  const rows = await ScanModel.findAll({
+    attributes: ['id'],
+    where: { status: { [Op.in]: ['waiting', 'reading'] } },
+    order: ['createdAt'],
+  });
+  return rows.map((row) => row.id);
+}
