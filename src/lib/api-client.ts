@@ -6,9 +6,8 @@ import type {
   QueryInputOf,
   ResponseOf,
 } from '../../server/contract/endpoint.ts';
-import { problemSchema } from '../../server/contract/problems.ts';
 import type { Problem } from '../../server/contract/problems.ts';
-import { sessionEndpoints } from '../../server/contract/sessions.ts';
+import type { Session } from '../../server/contract/sessions.ts';
 import { ApiError, NetworkError } from './api-error.ts';
 
 export { ApiError, NetworkError } from './api-error.ts';
@@ -76,21 +75,30 @@ function describeStatus(status: number): Problem {
 /** Reads an error answer's body text as problem details. */
 export function parseProblem(status: number, text: string): Problem {
   try {
-    const parsed = problemSchema.safeParse(JSON.parse(text));
-    if (parsed.success) return parsed.data;
+    const body: unknown = JSON.parse(text);
+    // Not checked by its schema: the sign-in screen is to load without the schemas.
+    if (typeof body === 'object' && body !== null && 'detail' in body && 'title' in body) {
+      return { ...(body as Problem), status };
+    }
   } catch {
     // A proxy's page in place of an answer of ours: the status is all there is to go by.
   }
   return describeStatus(status);
 }
 
+/** Asks who is signed in, and remembers the CSRF token that comes with the answer. */
+export async function fetchSession(signal?: AbortSignal): Promise<Session> {
+  // By address rather than from the contract's table, which would bring every schema along with it.
+  const session = (await sendRequest('get', '/api/session', {
+    ...(signal ? { signal } : {}),
+  })) as Session;
+  csrfToken = session.csrfToken;
+  return session;
+}
+
 /** The CSRF token, asked for first when this tab does not know it yet. */
 export async function requireCsrfToken(): Promise<string> {
-  if (csrfToken === null) {
-    const session = await callApi(sessionEndpoints.getSession, {});
-    csrfToken = session.csrfToken;
-  }
-  return csrfToken;
+  return csrfToken ?? (await fetchSession()).csrfToken;
 }
 
 async function send(url: string, init: RequestInit): Promise<Response> {
@@ -102,6 +110,34 @@ async function send(url: string, init: RequestInit): Promise<Response> {
   }
 }
 
+interface RequestParts {
+  body?: unknown;
+  ifMatch?: number;
+  signal?: AbortSignal;
+}
+
+/** Sends a request and gives the JSON of its answer, undefined when it has none. Errors as `callApi`. */
+export async function sendRequest(
+  method: Endpoint['method'],
+  url: string,
+  { body, ifMatch, signal }: RequestParts = {},
+): Promise<unknown> {
+  const headers = new Headers({ Accept: 'application/json' });
+  if (method !== 'get') headers.set('X-CSRF-Token', await requireCsrfToken());
+  if (body !== undefined) headers.set('Content-Type', 'application/json');
+  if (ifMatch !== undefined) headers.set('If-Match', `"${ifMatch}"`);
+  const response = await send(url, {
+    method: method.toUpperCase(),
+    headers,
+    credentials: 'same-origin',
+    body: body === undefined ? null : JSON.stringify(body),
+    signal: signal ?? null,
+  });
+  if (!response.ok) throw new ApiError(parseProblem(response.status, await response.text()));
+  if (response.status === 204) return undefined;
+  return response.json();
+}
+
 /**
  * Makes one call of the API and gives its answer, typed by the endpoint.
  * Throws ApiError when the server refuses and NetworkError when it cannot be reached.
@@ -110,18 +146,10 @@ export async function callApi<T extends Endpoint>(
   endpoint: T,
   call: CallOf<T>,
 ): Promise<ResponseOf<T>> {
-  const headers = new Headers({ Accept: 'application/json' });
-  if (endpoint.method !== 'get') headers.set('X-CSRF-Token', await requireCsrfToken());
-  if (call.body !== undefined) headers.set('Content-Type', 'application/json');
-  if (call.ifMatch !== undefined) headers.set('If-Match', `"${call.ifMatch}"`);
-  const response = await send(buildApiUrl(endpoint, call), {
-    method: endpoint.method.toUpperCase(),
-    headers,
-    credentials: 'same-origin',
-    body: call.body === undefined ? null : JSON.stringify(call.body),
-    signal: call.signal ?? null,
-  });
-  if (!response.ok) throw new ApiError(parseProblem(response.status, await response.text()));
-  if (response.status === 204 || !endpoint.response) return undefined as ResponseOf<T>;
-  return (await response.json()) as ResponseOf<T>;
+  const { body, ifMatch, signal } = call as RequestParts;
+  return (await sendRequest(endpoint.method, buildApiUrl(endpoint, call), {
+    body,
+    ...(ifMatch === undefined ? {} : { ifMatch }),
+    ...(signal ? { signal } : {}),
+  })) as ResponseOf<T>;
 }
