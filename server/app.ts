@@ -7,6 +7,7 @@ import { requireCsrfToken } from './auth/csrf.ts';
 import { createPassport, createSessions } from './auth/sign-in.ts';
 import type { Deps } from './deps.ts';
 import { NotFoundError } from './errors.ts';
+import { accountRoutes } from './routes/account-routes.ts';
 import { activityRoutes } from './routes/activity-routes.ts';
 import { boxRoutes } from './routes/box-routes.ts';
 import { calendarRoutes } from './routes/calendar-routes.ts';
@@ -82,6 +83,7 @@ export function createApp(deps: Deps): App {
   });
   api.use('/api', requireCsrfToken);
   api.use(sessionRoutes(passport));
+  api.use(accountRoutes(deps));
   api.use(householdRoutes(deps));
   api.use(outflowRoutes(deps));
   api.use(boxRoutes(deps));

@@ -15,6 +15,9 @@ import { checkPassword, demoPassword } from './passwords.ts';
 declare module 'express-session' {
   interface SessionData {
     csrfToken: string;
+    /** Told to the user in the list of devices. */
+    userAgent?: string | undefined;
+    signedInAt?: string;
   }
 }
 

@@ -1,4 +1,5 @@
 /** Every call of the HTTP API. Routes are mounted from this table and nothing else. */
+import { accountEndpoints } from './accounts.ts';
 import { activityEndpoints } from './activity.ts';
 import { boxEndpoints } from './boxes.ts';
 import { healthEndpoints } from './health.ts';
@@ -14,6 +15,7 @@ import { subjectEndpoints } from './subjects.ts';
 
 export const endpoints = {
   ...sessionEndpoints,
+  ...accountEndpoints,
   ...householdEndpoints,
   ...boxEndpoints,
   ...scanEndpoints,

@@ -41,12 +41,7 @@ export function sessionRoutes(passport: AppPassport): Router {
         'This e-mail address and password do not go together. Check both and try again.',
       );
     }
-    // logIn gives the session a new id, so that one handed out before sign-in is worth nothing.
-    await new Promise<void>((resolve, reject) => {
-      request.logIn(caller, (error: unknown) => (error ? reject(asError(error)) : resolve()));
-    });
-    request.session.csrfToken = newCsrfToken();
-    request.caller = caller;
+    await openSession(request, caller);
     return describeSession(request);
   });
 
@@ -60,7 +55,18 @@ export function sessionRoutes(passport: AppPassport): Router {
   return router;
 }
 
-function describeSession(request: Request): Session {
+/** Signs a caller in: the session gets a new id, so that one handed out before is worth nothing. */
+export async function openSession(request: Request, caller: Caller): Promise<void> {
+  await new Promise<void>((resolve, reject) => {
+    request.logIn(caller, (error: unknown) => (error ? reject(asError(error)) : resolve()));
+  });
+  request.session.csrfToken = newCsrfToken();
+  request.session.userAgent = request.get('user-agent')?.slice(0, 300);
+  request.session.signedInAt = new Date().toISOString();
+  request.caller = caller;
+}
+
+export function describeSession(request: Request): Session {
   return {
     user: request.caller?.user ?? null,
     memberships: request.caller?.memberships ?? [],

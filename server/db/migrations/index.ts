@@ -1,5 +1,6 @@
 /** All migrations in order. A new one is added at the end; one that was released is never changed. */
 import type { Migration } from '../migrate.ts';
 import { migration as firstTables } from './0001-first-tables.ts';
+import { migration as accountTokens } from './0002-account-tokens.ts';
 
-export const migrations: Migration[] = [firstTables];
+export const migrations: Migration[] = [firstTables, accountTokens];

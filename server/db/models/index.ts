@@ -4,6 +4,7 @@ import { initPracticeModel } from './practice-model.ts';
 import { initUserModel } from './user-model.ts';
 import { initMembershipModel } from './membership-model.ts';
 import { initHouseholdModel } from './household-model.ts';
+import { initAccountTokenModel } from './account-token-model.ts';
 import { initAreaModel } from './area-model.ts';
 import { initBoxModel } from './box-model.ts';
 import { initScanModel } from './scan-model.ts';
@@ -25,6 +26,7 @@ export function initModels(sequelize: Sequelize): void {
   initUserModel(sequelize);
   initMembershipModel(sequelize);
   initHouseholdModel(sequelize);
+  initAccountTokenModel(sequelize);
   initAreaModel(sequelize);
   initBoxModel(sequelize);
   initScanModel(sequelize);

@@ -81,3 +81,65 @@ function query<T extends object>(sql: string, bind: Record<string, unknown>): Pr
   if (!sequelize) throw new Error('No database is connected.');
   return sequelize.query<T>(sql, { bind, type: QueryTypes.SELECT });
 }
+
+export async function insertUser(
+  values: { email: string; name: string; passwordHash: string | null },
+  transaction: Transaction,
+): Promise<UserRow> {
+  const made = await UserModel.create({ ...values, email: values.email.trim() }, { transaction });
+  await made.reload({ transaction });
+  return made.get({ plain: true });
+}
+
+export async function updateUser(
+  id: string,
+  values: Partial<Pick<UserRow, 'email' | 'name' | 'passwordHash'>>,
+  transaction: Transaction,
+): Promise<void> {
+  await UserModel.update(values, { where: { id }, transaction });
+}
+
+export async function findMembershipOf(
+  householdId: string,
+  membershipId: string,
+  transaction: Transaction,
+): Promise<MembershipRow | null> {
+  const found = await MembershipModel.findOne({
+    where: { id: membershipId, householdId },
+    transaction,
+    lock: transaction.LOCK.UPDATE,
+  });
+  return found?.get({ plain: true }) ?? null;
+}
+
+export async function updateMembershipRow(
+  id: string,
+  values: Partial<MembershipRow>,
+  transaction: Transaction,
+): Promise<void> {
+  await MembershipModel.update(values, { where: { id }, transaction });
+}
+
+/** One membership of a household with its user, whether in force or not. */
+export async function findMember(
+  householdId: string,
+  membershipId: string,
+): Promise<Member | null> {
+  const rows = await query<Membership & { userId: string; userName: string; userEmail: string }>(
+    `select ${membershipColumns}, u.id as "userId", u.name as "userName", u.email as "userEmail"
+     from memberships m join users u on u.id = m.user_id
+       join practices p on p.id = m.practice_id left join households h on h.id = m.household_id
+     where m.id = $membershipId and m.household_id = $householdId`,
+    { membershipId, householdId },
+  );
+  const row = rows[0];
+  if (!row) return null;
+  const { userId, userName, userEmail, ...membership } = row;
+  return { membership, user: { id: userId, name: userName, email: userEmail } };
+}
+
+/** A practice that a user belongs or belonged to, in whose name messages go out; null when none. */
+export async function findFirstPracticeOf(userId: string): Promise<string | null> {
+  const found = await MembershipModel.findOne({ where: { userId }, order: ['createdAt'] });
+  return found?.practiceId ?? null;
+}
