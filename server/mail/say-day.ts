@@ -1,26 +1,10 @@
 import type { IsoDate } from '../contract/dates.ts';
 
-const monthNames = [
-  'January',
-  'February',
-  'March',
-  'April',
-  'May',
-  'June',
-  'July',
-  'August',
-  'September',
-  'October',
-  'November',
-  'December',
-] as const;
+const longDay = new Intl.DateTimeFormat('en-GB', { dateStyle: 'long', timeZone: 'UTC' });
 
 /** "3 March 2027": the month as a word, so that nobody reads day and month the wrong way round. */
 export function sayDay(day: IsoDate): string {
-  const [year = '', month = '', dayOfMonth = ''] = day.split('-');
-  const name = monthNames[Number(month) - 1];
-  if (!name) throw new RangeError(`"${day}" is not a calendar day written yyyy-mm-dd.`);
-  return `${Number(dayOfMonth)} ${name} ${year}`;
+  return longDay.format(new Date(`${day}T00:00:00Z`));
 }
 
 /** "1 paper", "12 papers". */
