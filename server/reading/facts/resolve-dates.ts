@@ -1,0 +1,305 @@
+/** Chooses, of all dates on a paper, the one for each role, and adds what follows without being printed. */
+import type { ClassId } from '../../contract/document-classes.ts';
+import type { IsoDate } from '../../contract/dates.ts';
+import type { DateFact, DateRole, Facts } from '../../contract/readings.ts';
+import { addDays, addMonths, countDaysInMonth, dayNumber, splitIsoDate } from './calendar-days.ts';
+import type { RoledDate } from './date-roles.ts';
+import { isPeriodClass } from './key-date.ts';
+import { findYearlessRange } from './parse-dates.ts';
+import { letterConfidence } from './paper-lines.ts';
+import type { PaperLine } from './paper-lines.ts';
+import { findLoneYear, findPrintedTaxYear, findTaxYearSpan, taxYearOf } from './tax-year.ts';
+
+type Dates = Facts['dates'];
+
+/** Classes for which a tax year belongs to the paper. */
+const taxYearClasses: ReadonlySet<string> = new Set<ClassId>([
+  'tax-return',
+  'tax-assessment',
+  'annual-pay-statement',
+  'investment-income-statement',
+  'sales-tax-return',
+  'donation-receipt',
+  'property-tax-bill',
+  'business-accounts',
+  'payroll-record',
+  'pension-statement',
+  'benefit-award',
+  'payslip',
+]);
+
+/** Yearly slips that print nothing but the year. */
+const yearlySlips: ReadonlySet<string> = new Set<ClassId>([
+  'annual-pay-statement',
+  'investment-income-statement',
+  'tax-return',
+]);
+
+const runsToAnEnd: ReadonlySet<string> = new Set<ClassId>([
+  'insurance-policy',
+  'tenancy-agreement',
+  'warranty',
+]);
+
+const statements: ReadonlySet<string> = new Set<ClassId>([
+  'bank-statement',
+  'card-statement',
+  'investment-statement',
+]);
+
+const oneDay: ReadonlySet<string> = new Set<ClassId>([
+  'vehicle-service',
+  'building-certificate',
+  'trade-note',
+  'death-certificate',
+  'marriage-certificate',
+]);
+
+function toFact(date: RoledDate, confidence: number): DateFact {
+  return {
+    value: date.value,
+    confidence: round(confidence * letterConfidence(date.line, date.start, date.end)),
+    seenAt: { page: date.line.page, box: date.box },
+    printed: date.printed,
+  };
+}
+
+function implied(value: IsoDate, from: DateFact | null, confidence = 0.6): DateFact {
+  return {
+    value,
+    confidence: round(Math.min(confidence, from?.confidence ?? 1)),
+    seenAt: from?.seenAt ?? null,
+    printed: from?.printed ?? null,
+  };
+}
+
+function round(value: number): number {
+  return Math.round(Math.max(0, Math.min(1, value)) * 1000) / 1000;
+}
+
+/** How well a date answers a role: the label, then an early place on an early page. */
+function weigh(date: RoledDate): number {
+  let weight = date.strength - (date.line.page - 1) * 0.06 - date.line.index * 0.0004;
+  if (date.isRow) weight -= 0.5;
+  if (date.precision !== 'day') weight -= 0.25;
+  return weight;
+}
+
+function pickBest(dates: readonly RoledDate[], role: DateRole): RoledDate | null {
+  let best: RoledDate | null = null;
+  for (const date of dates) {
+    if (date.role !== role || weigh(date) <= 0.2) continue;
+    if (!best || weigh(date) > weigh(best)) best = date;
+  }
+  return best;
+}
+
+/** A period is a pair where one is printed as a pair; single ends only otherwise. */
+function pickPeriod(dates: readonly RoledDate[]): [RoledDate | null, RoledDate | null] {
+  let best: [RoledDate, RoledDate] | null = null;
+  dates.forEach((date, index) => {
+    const next = dates[index + 1];
+    if (date.range !== 'from' || next?.range !== 'to' || date.role !== 'periodStart') return;
+    if (!best || weigh(date) > weigh(best[0]) + 0.05) best = [date, next];
+  });
+  if (best) return best;
+  const start = pickBest(dates, 'periodStart');
+  const end = pickBest(dates, 'periodEnd');
+  return start && end && start.value > end.value ? [null, end] : [start, end];
+}
+
+/** A date without a label that reads as the paper's own: alone near the top, else alone, else the first. */
+function pickUnlabelled(dates: readonly RoledDate[]): RoledDate | null {
+  const free = dates.filter((date) => date.role === null && !date.isRow);
+  const days = free.filter((date) => date.precision === 'day');
+  const top = days.find((date) => date.alone && date.line.page === 1 && date.box.y < 0.5);
+  const first = days.find((date) => date.line.page === 1);
+  return top ?? days.find((date) => date.alone) ?? first ?? days[0] ?? free[0] ?? null;
+}
+
+/** Places the years of a stretch such as `18 Aug to 17 Sep` as near to a known day as they can be. */
+function placeYearlessRange(
+  lines: readonly PaperLine[],
+  near: IsoDate,
+): [DateFact, DateFact] | null {
+  for (const line of lines) {
+    const range = findYearlessRange(line.text);
+    if (!range) continue;
+    const { year } = splitIsoDate(near);
+    const options = [year - 1, year, year + 1].map((endYear) => {
+      const startYear = range.from.month > range.to.month ? endYear - 1 : endYear;
+      return {
+        start: `${startYear}-${pad(range.from.month)}-${pad(range.from.day)}`,
+        end: `${endYear}-${pad(range.to.month)}-${pad(range.to.day)}`,
+      };
+    });
+    options.sort((a, b) => distance(a.end, near) - distance(b.end, near));
+    const best = options[0];
+    if (!best) continue;
+    const shared = {
+      confidence: round(0.7 * letterConfidence(line, range.start, range.end)),
+      seenAt: { page: line.page, box: line.box },
+      printed: line.text.slice(range.start, range.end),
+    };
+    return [
+      { value: best.start, ...shared },
+      { value: best.end, ...shared },
+    ];
+  }
+  return null;
+}
+
+function pad(value: number): string {
+  return String(value).padStart(2, '0');
+}
+
+function distance(a: IsoDate, b: IsoDate): number {
+  return Math.abs(dayNumber(a) - dayNumber(b));
+}
+
+export interface ResolvedDates {
+  dates: Dates;
+  taxYear: string | null;
+}
+
+/** The dates of a paper of this class in this country, printed ones first, then what follows from them. */
+export function resolveDates(
+  found: readonly RoledDate[],
+  lines: readonly PaperLine[],
+  classId: string,
+  country: string | null,
+): ResolvedDates {
+  const usable = found.map((date) =>
+    date.role === 'birth' && classId === 'birth-certificate'
+      ? { ...date, role: 'eventDate' as const }
+      : date,
+  );
+  const [start, end] = pickPeriod(usable);
+  const dates: Dates = {
+    issued: factOf(pickBest(usable, 'issued')),
+    due: factOf(pickBest(usable, 'due')),
+    periodStart: factOf(start),
+    periodEnd: factOf(end),
+    expiry: factOf(pickBest(usable, 'expiry')),
+    eventDate: factOf(pickBest(usable, 'eventDate')),
+  };
+  if (!dates.issued) {
+    const spare = pickUnlabelled(usable);
+    if (spare) dates.issued = toFact(spare, 0.45);
+  }
+  addYearlessPeriod(dates, lines);
+  const taxYear = taxYearClasses.has(classId)
+    ? decideTaxYear(dates, lines, classId, country)
+    : null;
+  addImplied(dates, lines, classId, country, taxYear);
+  return { dates, taxYear };
+}
+
+function factOf(date: RoledDate | null): DateFact | null {
+  return date ? toFact(date, Math.min(1, date.strength)) : null;
+}
+
+function addYearlessPeriod(dates: Dates, lines: readonly PaperLine[]): void {
+  if (dates.periodEnd || dates.periodStart || !dates.issued) return;
+  const pair = placeYearlessRange(lines, dates.issued.value);
+  if (pair) [dates.periodStart, dates.periodEnd] = pair;
+}
+
+function decideTaxYear(
+  dates: Dates,
+  lines: readonly PaperLine[],
+  classId: string,
+  country: string | null,
+): string | null {
+  const printed = findPrintedTaxYear(lines, country);
+  if (printed && classId !== 'payslip') return printed;
+  if (classId === 'payslip') return dates.issued ? taxYearOf(dates.issued.value, country) : printed;
+  if (yearlySlips.has(classId) && country !== 'GB' && country !== 'AU') {
+    const lone = findLoneYear(lines);
+    if (lone) return lone;
+  }
+  if (dates.periodEnd && isPeriodClass(classId)) return taxYearOf(dates.periodEnd.value, country);
+  return null;
+}
+
+function addImplied(
+  dates: Dates,
+  lines: readonly PaperLine[],
+  classId: string,
+  country: string | null,
+  taxYear: string | null,
+): void {
+  if (runsToAnEnd.has(classId)) {
+    dates.expiry ??= dates.periodEnd;
+    dates.periodEnd ??= dates.expiry;
+  }
+  if (taxYear && isPeriodClass(classId)) {
+    const span = findTaxYearSpan(taxYear, country);
+    if (span && !dates.periodEnd) {
+      dates.periodEnd = implied(span.end, null, 0.7);
+      dates.periodStart ??= implied(span.start, null, 0.7);
+    } else if (span && dates.periodEnd?.value === span.end) {
+      dates.periodStart ??= implied(span.start, dates.periodEnd, 0.7);
+    }
+  }
+  if (classId === 'payslip' && dates.issued) {
+    const { year, month } = splitIsoDate(dates.issued.value);
+    const first = `${year}-${pad(month)}-01`;
+    const last = `${year}-${pad(month)}-${pad(countDaysInMonth(year, month))}`;
+    dates.periodStart ??= implied(first, dates.issued, 0.5);
+    dates.periodEnd ??= implied(last, dates.issued, 0.5);
+  }
+  if (statements.has(classId)) dates.issued ??= dates.periodEnd;
+  if (oneDay.has(classId)) dates.issued ??= dates.eventDate;
+  if (!dates.due && dates.issued) addTermDays(dates, lines, dates.issued);
+  if (classId === 'warranty' && !dates.expiry) addWarrantyEnd(dates, lines);
+}
+
+/** "Payment within 30 days" counted from the date of the paper. */
+function addTermDays(dates: Dates, lines: readonly PaperLine[], issued: DateFact): void {
+  for (const line of lines) {
+    const match =
+      /(?:within|net|terms:?|payable in|payment in)\s+(\d{1,2})\s*days|(\d{1,2})\s*days\s+(?:net|from (?:the )?(?:invoice|date))/i.exec(
+        line.text,
+      );
+    const days = Number(match?.[1] ?? match?.[2]);
+    if (!match || !/pay|terms|net|invoice|due|zahl/i.test(line.text) || !(days > 0)) continue;
+    dates.due = {
+      ...implied(addDays(issued.value, days), null, 0.5),
+      seenAt: { page: line.page, box: line.box },
+      printed: match[0],
+    };
+    return;
+  }
+}
+
+const yearCounts: Record<string, number> = {
+  one: 1,
+  two: 2,
+  three: 3,
+  four: 4,
+  five: 5,
+  six: 6,
+  seven: 7,
+  eight: 8,
+  ten: 10,
+};
+
+/** A guarantee of so many years or months runs from the purchase or installation; the last day is the day before. */
+function addWarrantyEnd(dates: Dates, lines: readonly PaperLine[]): void {
+  const from = dates.eventDate ?? dates.periodStart ?? dates.issued;
+  if (!from) return;
+  for (const line of lines) {
+    const match =
+      /\b(\d{1,2}|one|two|three|four|five|six|seven|eight|ten)[ -](year|month)s?\b/i.exec(
+        line.text,
+      );
+    if (!match || !/guarantee|warrant|cover|parts/i.test(line.text)) continue;
+    const word = (match[1] ?? '').toLowerCase();
+    const count = yearCounts[word] ?? Number(word);
+    const months = /month/i.test(match[2] ?? '') ? count : count * 12;
+    if (!(months > 0) || months > 480) continue;
+    dates.expiry = implied(addDays(addMonths(from.value, months), -1), from, 0.5);
+    return;
+  }
+}
