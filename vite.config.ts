@@ -3,7 +3,7 @@ import react from '@vitejs/plugin-react';
 import { defineConfig } from 'vitest/config';
 
 const serverFolders =
-  'api,code-health,db,jobs,mail,print,published,reading,retention,rules,setup,storage,use-cases';
+  'api,calendar,code-health,db,jobs,mail,print,published,reading,reminders,retention,rules,setup,storage,use-cases';
 
 /** During development the launcher runs the API on a port of its own and names it here. */
 const apiPort = process.env.API_PORT ?? process.env.PORT ?? '4180';
