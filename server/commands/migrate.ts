@@ -1,24 +1,48 @@
-/** `npm run migrate`: brings the database's structure up to date. */
-import { loadDatabaseUrlOrExit } from '../config.ts';
+/**
+ * `npm run migrate`: brings the database's structure up to date. With `--check-settings` all
+ * settings are checked first, as the server would.
+ */
+import { Client } from 'pg';
+import { loadConfigOrExit, loadDatabaseUrlOrExit } from '../config.ts';
 import { migrate } from '../db/migrate.ts';
 
-const databaseUrl = loadDatabaseUrlOrExit();
+const oldestVersion = 15;
+
+const databaseUrl = process.argv.includes('--check-settings')
+  ? loadConfigOrExit().databaseUrl
+  : loadDatabaseUrlOrExit();
+
 try {
+  await requireVersion(databaseUrl);
   const done = await migrate(databaseUrl);
-  console.log(
-    done.length === 0
-      ? 'The database is up to date.'
-      : `Applied ${done.length} migration(s): ${done.join(', ')}`,
-  );
+  if (done.length > 0) console.log(`The database was brought up to date: ${done.join(', ')}.`);
 } catch (error) {
-  console.error(`The database could not be migrated: ${describeFailure(error)}`);
+  console.error(describeFailure(error));
   process.exit(1);
 }
 process.exit(0);
 
+async function requireVersion(url: string): Promise<void> {
+  const client = new Client({ connectionString: url, connectionTimeoutMillis: 10_000 });
+  await client.connect();
+  try {
+    const { rows } = await client.query<{ server_version_num: string }>('show server_version_num');
+    const major = Math.floor(Number(rows[0]?.server_version_num ?? 0) / 10_000);
+    if (major < oldestVersion) {
+      throw new Error(`PostgreSQL ${major} is too old; ${oldestVersion} or newer is needed.`);
+    }
+  } finally {
+    await client.end();
+  }
+}
+
 function describeFailure(error: unknown): string {
-  const reason = error instanceof Error ? error.message : String(error);
-  return /ECONNREFUSED/.test(reason)
-    ? 'it does not answer. Start Slackwater with "npm start" first, or set DATABASE_URL.'
-    : reason;
+  const { code, message } = error as { code?: string; message?: string };
+  if (code === 'ECONNREFUSED' || code === 'ENOTFOUND' || code === 'ETIMEDOUT') {
+    return 'The database does not answer. Start Slackwater with "npm start", or check DATABASE_URL.';
+  }
+  if (code === '28P01') return 'The database refuses the password in DATABASE_URL.';
+  if (code === '3D000')
+    return 'The database named in DATABASE_URL does not exist. Create it first.';
+  return `The database could not be migrated: ${message ?? String(error)}`;
 }

@@ -10,11 +10,19 @@ import path from 'node:path';
 /** A fault that a person can do something about: its message is printed alone, without a trace. */
 export class PlainError extends Error {}
 
+/** @type {Set<import('node:child_process').ChildProcess>} */
+const underWay = new Set();
+
+/** Asks every program that `run` is waiting for to stop. */
+export function endPrograms() {
+  for (const child of underWay) child.kill('SIGTERM');
+}
+
 /**
  * Runs a program to its end.
  * @param {string} command
  * @param {string[]} args
- * @param {{ cwd?: string, env?: NodeJS.ProcessEnv, inherit?: boolean, input?: string, onSpawn?: (child: import('node:child_process').ChildProcess) => void }} [options]
+ * @param {{ cwd?: string, env?: NodeJS.ProcessEnv, inherit?: boolean, input?: string }} [options]
  *   `inherit` shows its output to the person instead of collecting it
  * @returns {Promise<{ code: number, output: string }>} `code` is 127 when the program does not exist
  */
@@ -29,15 +37,19 @@ export function run(command, args, options = {}) {
         options.inherit ? 'inherit' : 'pipe',
       ],
     });
-    options.onSpawn?.(child);
+    underWay.add(child);
     /** @type {Buffer[]} */
     const chunks = [];
     child.stdout?.on('data', (/** @type {Buffer} */ chunk) => chunks.push(chunk));
     child.stderr?.on('data', (/** @type {Buffer} */ chunk) => chunks.push(chunk));
-    child.on('error', (error) => resolve({ code: 127, output: error.message }));
-    child.on('close', (code, signal) =>
-      resolve({ code: code ?? (signal ? 128 : 1), output: Buffer.concat(chunks).toString('utf8') }),
-    );
+    child.on('error', (error) => {
+      underWay.delete(child);
+      resolve({ code: 127, output: error.message });
+    });
+    child.on('close', (code) => {
+      underWay.delete(child);
+      resolve({ code: code ?? 128, output: Buffer.concat(chunks).toString('utf8') });
+    });
     if (options.input !== undefined) child.stdin?.end(options.input);
   });
 }
