@@ -1,0 +1,309 @@
+/**
+ * Moments: days from which a clock can start. Most are inputs of the case; some are worked out from others
+ * when they are not given, and say so.
+ */
+import type { CaseInputs } from '../contract/cases.ts';
+import { ownerInputsSchema } from '../contract/cases.ts';
+import type { IsoDate } from '../contract/dates.ts';
+import {
+  addMonths,
+  endOfMonth,
+  endOfYearEnding,
+  isEndOfMonth,
+  laterOf,
+  makeDay,
+  wordDay,
+} from './dates.ts';
+
+export type InputName = keyof Omit<CaseInputs, 'owners'>;
+/** Every input a rule may name, taken from the contract so that none can be misspelt. */
+export const inputNames = Object.keys(ownerInputsSchema.shape) as [InputName, ...InputName[]];
+
+/** Inputs that are days. */
+export const dayInputs = [
+  'documentDate',
+  'invoiceDate',
+  'writtenOn',
+  'receivedOn',
+  'signedOn',
+  'supersededOn',
+  'drawnUpOn',
+  'meetingDate',
+  'effectiveDate',
+  'transactionDate',
+  'transactionCompletedOn',
+  'obtainedOn',
+  'supplyDate',
+  'paidOn',
+  'taxYearEnd',
+  'incomeYearEnd',
+  'financialYearEnd',
+  'quarterEnd',
+  'payReferencePeriodEnd',
+  'nextPayReferencePeriodEnd',
+  'filedOn',
+  'lodgedOn',
+  'returnDeliveredOn',
+  'returnReceivedOn',
+  'dueOn',
+  'nominalDueOn',
+  'statutoryDueOn',
+  'extendedDueOn',
+  'noticeToFileOn',
+  'amendedOn',
+  'amendedReturnReceivedOn',
+  'taxDueOn',
+  'taxPaidOn',
+  'noticeOfAssessmentOn',
+  'acquiredOn',
+  'startedOn',
+  'endedOn',
+  'disposedOn',
+  'acceptedOn',
+  'deliveredOn',
+  'warrantyEndsOn',
+  'hiredOn',
+  'finalOn',
+  'valuationDate',
+  'clearanceCertificateOn',
+  'socialSecurityBenefitsBeganOn',
+  'birthDate',
+  'eventDate',
+] as const satisfies readonly InputName[];
+export type DayInput = (typeof dayInputs)[number];
+
+/** Moments that are worked out: tax years, the date of the paper, the end of the next pay period. */
+const derivedMoments = [
+  'paperDate',
+  'gbTaxYear',
+  'auIncomeYear',
+  'calendarTaxYear',
+  'claimYearEnd',
+  'nextPayPeriod',
+  'employmentTaxDue',
+] as const;
+export type DerivedMoment = (typeof derivedMoments)[number];
+export const momentNames = [...dayInputs, ...derivedMoments] as const;
+export type Moment = DayInput | DerivedMoment;
+
+/** A resolved moment: `day` null with `isNever` true when the case says that it has not happened. */
+export interface ResolvedMoment {
+  readonly day: IsoDate | null;
+  readonly isNever: boolean;
+  /** What the day is, for a step: "tax year ending". */
+  readonly label: string;
+  /** How it was worked out, when it was not given. */
+  readonly derivedBy: string | null;
+}
+
+const labels: Record<Moment, string> = {
+  documentDate: 'the date on the paper',
+  invoiceDate: 'the date of the invoice',
+  writtenOn: 'the day it was written',
+  receivedOn: 'the day it was received',
+  signedOn: 'the day it was signed',
+  supersededOn: 'the day it was replaced',
+  drawnUpOn: 'the day it was drawn up',
+  meetingDate: 'the day of the meeting',
+  effectiveDate: 'the effective date',
+  transactionDate: 'the day of the transaction',
+  transactionCompletedOn: 'the day the transaction was completed',
+  obtainedOn: 'the day the record was prepared or obtained',
+  supplyDate: 'the day of supply',
+  paidOn: 'the day of payment',
+  taxYearEnd: 'the end of the tax year',
+  incomeYearEnd: 'the end of the income year',
+  financialYearEnd: 'the end of the financial year',
+  quarterEnd: 'the end of the quarter',
+  payReferencePeriodEnd: 'the end of the pay reference period',
+  nextPayReferencePeriodEnd: 'the end of the pay reference period after it',
+  filedOn: 'the day the return was filed',
+  lodgedOn: 'the day the return was lodged',
+  returnDeliveredOn: 'the day the return was delivered',
+  returnReceivedOn: 'the day the return was received',
+  dueOn: 'the due day',
+  nominalDueOn: 'the due day before any shift',
+  statutoryDueOn: 'the due day in the statute',
+  extendedDueOn: 'the extended due day',
+  noticeToFileOn: 'the day of the notice to file',
+  amendedOn: 'the day the return was amended',
+  amendedReturnReceivedOn: 'the day the amended return was received',
+  taxDueOn: 'the day the tax was due',
+  taxPaidOn: 'the day the tax was paid',
+  noticeOfAssessmentOn: 'the day of the notice of assessment',
+  acquiredOn: 'the day it was bought',
+  startedOn: 'the day it began',
+  endedOn: 'the day it ended',
+  disposedOn: 'the day it was sold or given up',
+  acceptedOn: 'the day the work was accepted',
+  deliveredOn: 'the day of delivery',
+  warrantyEndsOn: 'the day the warranty ends',
+  hiredOn: 'the day of hiring',
+  finalOn: 'the day the order or judgment became final',
+  valuationDate: 'the valuation date',
+  clearanceCertificateOn: 'the day the clearance certificate was received',
+  socialSecurityBenefitsBeganOn: 'the day Social Security benefits began',
+  birthDate: 'the date of birth',
+  eventDate: 'the day of the event',
+  paperDate: 'the date of the paper',
+  gbTaxYear: 'the end of the tax year',
+  auIncomeYear: 'the end of the income year',
+  calendarTaxYear: 'the end of the tax year',
+  claimYearEnd: 'the end of the year claimed for',
+  nextPayPeriod: 'the end of the pay reference period after it',
+  employmentTaxDue: 'the day the tax was due',
+};
+
+/** What a moment is called in a sentence. */
+export function momentLabel(moment: Moment): string {
+  return labels[moment];
+}
+
+const paperDates = [
+  'documentDate',
+  'invoiceDate',
+  'writtenOn',
+  'drawnUpOn',
+  'signedOn',
+  'transactionDate',
+  'supplyDate',
+  'obtainedOn',
+  'receivedOn',
+  'paidOn',
+] as const satisfies readonly DayInput[];
+
+/** The date of the paper: the first of its dates that is given. */
+export function findPaperDate(inputs: CaseInputs): IsoDate | null {
+  for (const name of paperDates) {
+    const day = inputs[name];
+    if (day) return day;
+  }
+  return null;
+}
+
+/** A day inside the year to which a paper belongs, when the year itself is not given. */
+function findDayInYear(inputs: CaseInputs): IsoDate | null {
+  return (
+    inputs.payReferencePeriodEnd ??
+    inputs.quarterEnd ??
+    inputs.transactionDate ??
+    findPaperDate(inputs)
+  );
+}
+
+const found = (moment: Moment, day: IsoDate, derivedBy: string | null = null): ResolvedMoment => ({
+  day,
+  isNever: false,
+  label: labels[moment],
+  derivedBy,
+});
+const missing = (moment: Moment, isNever = false): ResolvedMoment => ({
+  day: null,
+  isNever,
+  label: labels[moment],
+  derivedBy: null,
+});
+
+/** Inputs that name a period or a paper's own date: `null` there means no more than "not given". */
+const notEvents = new Set<Moment>([
+  ...paperDates.filter((name) => name !== 'paidOn'),
+  'effectiveDate',
+  'meetingDate',
+  'taxYearEnd',
+  'incomeYearEnd',
+  'financialYearEnd',
+  'quarterEnd',
+  'payReferencePeriodEnd',
+  'nextPayReferencePeriodEnd',
+]);
+
+/** A paper used for a disposal counts from the year of the disposal, never from an earlier one. */
+function resolveYear(
+  moment: Moment,
+  inputs: CaseInputs,
+  given: IsoDate | null,
+  endOf: (day: IsoDate) => IsoDate,
+  waitsFor: DayInput | null,
+): ResolvedMoment {
+  const event = waitsFor ? inputs[waitsFor] : null;
+  if (event) {
+    const ofEvent = endOf(event);
+    if (given) return found(moment, laterOf(given, ofEvent));
+    return found(
+      moment,
+      ofEvent,
+      `${wordDay(event)} falls in the year that ends on ${wordDay(ofEvent)}.`,
+    );
+  }
+  if (given) return found(moment, given);
+  const day = findDayInYear(inputs);
+  if (!day) return missing(moment);
+  const end = endOf(day);
+  return found(moment, end, `${wordDay(day)} falls in the year that ends on ${wordDay(end)}.`);
+}
+
+const endOfGbTaxYear = (day: IsoDate): IsoDate => endOfYearEnding(day, '04-05');
+const endOfAuIncomeYear = (day: IsoDate): IsoDate => endOfYearEnding(day, '06-30');
+const endOfYear = (day: IsoDate): IsoDate => endOfYearEnding(day, '12-31');
+
+/** The end of the pay reference period after the recorded one; it is never longer than a month. */
+function resolveNextPayPeriod(inputs: CaseInputs): ResolvedMoment {
+  const given = inputs.nextPayReferencePeriodEnd;
+  if (given) return found('nextPayPeriod', given);
+  const end = inputs.payReferencePeriodEnd;
+  if (!end) return missing('nextPayPeriod');
+  const next = isEndOfMonth(end) ? endOfMonth(addMonths(end, 1)) : addMonths(end, 1);
+  return found(
+    'nextPayPeriod',
+    next,
+    `The next pay period is counted as a month: it ends on ${wordDay(next)}.`,
+  );
+}
+
+/** US employment tax of a quarter is due on the last day of the month after it. */
+function resolveEmploymentTaxDue(inputs: CaseInputs): ResolvedMoment {
+  if (inputs.taxDueOn) return found('employmentTaxDue', inputs.taxDueOn);
+  if (!inputs.quarterEnd) return missing('employmentTaxDue');
+  const due = endOfMonth(addMonths(inputs.quarterEnd, 1));
+  return found('employmentTaxDue', due, `Tax of the quarter was due on ${wordDay(due)}.`);
+}
+
+/** Finds the day of a moment in a case. `waitsFor` is the event that decides the year, if any. */
+export function resolveMoment(
+  moment: Moment,
+  inputs: CaseInputs,
+  waitsFor: DayInput | null = null,
+): ResolvedMoment {
+  switch (moment) {
+    case 'paperDate': {
+      const day = findPaperDate(inputs);
+      return day ? found(moment, day) : missing(moment);
+    }
+    case 'gbTaxYear': {
+      const given =
+        inputs.taxYearEnd ?? (inputs.taxYear ? makeDay(inputs.taxYear + 1, 4, 5) : null);
+      return resolveYear(moment, inputs, given, endOfGbTaxYear, waitsFor);
+    }
+    case 'auIncomeYear':
+      return resolveYear(moment, inputs, inputs.incomeYearEnd ?? null, endOfAuIncomeYear, waitsFor);
+    case 'calendarTaxYear': {
+      const given = inputs.taxYear ? makeDay(inputs.taxYear, 12, 31) : null;
+      return resolveYear(moment, inputs, given, endOfYear, waitsFor);
+    }
+    case 'claimYearEnd': {
+      const year = inputs.claimYear ?? inputs.taxYear ?? null;
+      if (year) return found(moment, makeDay(year, 12, 31));
+      const day = inputs.paidOn ?? findPaperDate(inputs);
+      if (!day) return missing(moment);
+      return found(moment, endOfYear(day), `${wordDay(day)} falls in the year ${day.slice(0, 4)}.`);
+    }
+    case 'nextPayPeriod':
+      return resolveNextPayPeriod(inputs);
+    case 'employmentTaxDue':
+      return resolveEmploymentTaxDue(inputs);
+    default: {
+      const day = inputs[moment];
+      return day ? found(moment, day) : missing(moment, day === null && !notEvents.has(moment));
+    }
+  }
+}
