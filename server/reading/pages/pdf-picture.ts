@@ -24,7 +24,7 @@ const MAX_CONTENT_BYTES = 400_000;
 /** The document's structure, or null when it is encrypted or too damaged for this way in. */
 export async function openPdfStructure(bytes: Uint8Array): Promise<PDFDocument | null> {
   try {
-    return await PDFDocument.load(bytes, { updateMetadata: false, throwOnInvalidObject: false });
+    return await PDFDocument.load(bytes, { updateMetadata: false, throwOnInvalidObject: true });
   } catch {
     return null;
   }

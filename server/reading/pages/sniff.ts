@@ -58,24 +58,23 @@ async function findKind(bytes: Uint8Array): Promise<FileKind | { refused: string
   const type = await fileTypeFromBuffer(bytes).catch(() => undefined);
   const kind = type && type.mime !== 'application/pdf' ? kindsByMime[type.mime] : undefined;
   if (kind) return kind;
-  return { refused: `${describeForeign(head, type?.mime ?? '')} ${takes}` };
+  return { refused: describeForeign(head, type?.mime ?? '') };
 }
 
 function describeForeign(head: string, mime: string): string {
-  if (/<svg[\s>]|<!DOCTYPE svg/i.test(head)) return 'This is an SVG drawing, not a scan.';
+  if (/<svg[\s>]|<!DOCTYPE svg/i.test(head)) return `This is an SVG drawing, not a scan. ${takes}`;
   if (/<(!DOCTYPE html|html|script|body|head)[\s>]/i.test(head)) {
-    return 'This is a web page, whatever its name says.';
+    return `This is a web page, whatever its name says. ${takes}`;
   }
-  if (mime === 'image/gif') return 'GIF pictures are not read.';
+  if (mime === 'image/gif') return `GIF pictures are not read. ${takes}`;
   if (/zip|rar|7z|tar|gzip|compressed/.test(mime)) {
-    return 'This is an archive of files. Unpack it and bring the files one by one.';
+    return 'This is an archive of files. Unpack it and bring the files in it one by one.';
   }
   if (/officedocument|msword|x-cfb|opendocument|rtf|excel|powerpoint/.test(mime)) {
     return 'This is an office document. Save it as PDF and bring that.';
   }
-  if (mime.startsWith('image/')) return 'This kind of picture is not read.';
-  if (mime.startsWith('video/') || mime.startsWith('audio/')) return 'This is not a picture.';
-  return 'This file is not a scan, whatever its name says.';
+  if (mime.startsWith('image/')) return `This kind of picture is not read. ${takes}`;
+  return `This file is not a scan, whatever its name says. ${takes}`;
 }
 
 async function checkHeader(
