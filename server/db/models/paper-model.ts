@@ -15,6 +15,8 @@ export interface SteppedDown {
   on: string;
   byName: string;
   reason: string;
+  /** The advised day that was stepped down from; a longer advice asks anew. */
+  advisedUntil: string;
 }
 
 /** One document as a person would pick it up. Columns beside `facts` and `assessment` repeat what the register sorts by. */
