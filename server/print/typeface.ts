@@ -3,6 +3,7 @@ import { readFile } from 'node:fs/promises';
 import { createRequire } from 'node:module';
 import fontkit from '@pdf-lib/fontkit';
 import type { PDFDocument, PDFFont } from 'pdf-lib';
+import { alignGlyphs } from './align-glyphs.ts';
 
 const require = createRequire(import.meta.url);
 const files = {
@@ -52,7 +53,7 @@ async function embedTypeface(document: PDFDocument, weight: Weight): Promise<Typ
 function loadFile(weight: Weight): Promise<Uint8Array> {
   const cached = fileCache.get(weight);
   if (cached) return cached;
-  const loading = readFile(require.resolve(files[weight])).then((bytes) => new Uint8Array(bytes));
+  const loading = readFile(require.resolve(files[weight])).then(alignGlyphs);
   fileCache.set(weight, loading);
   return loading;
 }
