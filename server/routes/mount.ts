@@ -46,7 +46,9 @@ export function mountForHousehold<const T extends Endpoint & { access: Permissio
     const id = (call.params as { id?: string } | undefined)?.id ?? '';
     const household = await locateHousehold(kindOfPath(endpoint.path), id);
     if (!household) throw new NotFoundError();
-    return handle({ ...call, access: requireAccess(caller, household, endpoint.access) });
+    // Access first: spreading the call parses body and version, whose faults only members may learn of.
+    const access = requireAccess(caller, household, endpoint.access);
+    return handle({ ...call, access });
   });
 }
 
@@ -58,7 +60,8 @@ export function mountForPractice<const T extends Endpoint & { access: Permission
 ): void {
   register(router, endpoint, (call) => {
     const caller = requireCaller(call.request);
-    return handle({ ...call, caller, membership: requirePracticeAccess(caller, endpoint.access) });
+    const membership = requirePracticeAccess(caller, endpoint.access);
+    return handle({ ...call, caller, membership });
   });
 }
 

@@ -21,7 +21,7 @@ import { inTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { InvalidInputError, NotFoundError } from '../../errors.ts';
 import { printBoxLabel } from '../../print/box-label.ts';
-import { paperSizeOf } from '../../print/paper-size.ts';
+import { choosePaper } from '../../print/paper-sizes.ts';
 
 interface By {
   userId: string;
@@ -108,7 +108,7 @@ export async function printLabelOf(boxId: string, publicUrl: string): Promise<Ui
     label: box.label,
     areaName: box.areaName,
     url: `${publicUrl}/boxes/${box.id}`,
-    paper: paperSizeOf(household.country),
+    paper: choosePaper(household.country),
   });
 }
 
