@@ -1,0 +1,17 @@
+import { useEffect, useRef, useState } from 'react';
+
+/** The width of an element in pixels, followed as it changes; `first` until it was measured. */
+export function useWidth<T extends HTMLElement>(first: number) {
+  const ref = useRef<T>(null);
+  const [width, setWidth] = useState(first);
+  useEffect(() => {
+    const element = ref.current;
+    if (!element) return;
+    const observer = new ResizeObserver(([entry]) => {
+      if (entry && entry.contentRect.width > 0) setWidth(entry.contentRect.width);
+    });
+    observer.observe(element);
+    return () => observer.disconnect();
+  }, []);
+  return [ref, width] as const;
+}
