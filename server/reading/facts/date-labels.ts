@@ -8,6 +8,8 @@ interface LabelGroup {
   role: LabelRole;
   /** How plainly the words name the role, 0 to 1. */
   strength: number;
+  /** A small word that counts only right before the date. */
+  isNear?: boolean;
   phrases: string[];
 }
 
@@ -21,13 +23,13 @@ const groups: LabelGroup[] = [
       'date of (?:notice|invoice|letter|bill|report|statement|receipt|assessment|purchase|order|sale|payment|agreement|certificate|registration)',
       '(?:issue|issued|invoice|bill|billing|statement|notice|letter|report|receipt|order|purchase|sale|transaction|document|quote|assessment|certificate|print|claim|policy issue|pay|payment|payroll|paid|cheque|check|payslip|registration|registered|filing|filed|recording|recorded|signature|agreement|processing|preparation|mailing|delivery note) (?:date|dated|on)',
       'date (?:issued|of the issue|printed|prepared|recorded|filed|registered|signed|paid|posted|mailed|made|of the order|of the agreement|ordered|purchased|submitted|of pay|sent|reported)',
-      '(?:issued|ordered|purchased|printed|prepared|registered|filed|submitted|signed|recorded|posted|produced|generated|paid|received by hmrc|reported)(?: on| at)?',
+      '(?:issued|ordered|purchased|printed|prepared|filed|submitted|recorded|posted|produced|generated|paid|received by hmrc|reported|typed)(?: on| at)?',
+      'date (?:typed|dictated)',
       'tax point',
       'invoice date \\(tax point\\)',
       'pay day',
       'given (?:under|at)',
       'dated(?: this| the)?',
-      'signed and dated',
       'made (?:on|this)',
       'this agreement is dated',
       '(?:ausstellungs|rechnungs|beleg|brief)datum',
@@ -41,8 +43,21 @@ const groups: LabelGroup[] = [
   {
     role: 'issued',
     strength: 0.75,
-    phrases: ['date', 'datum', 'as of date', 'date and time', 'date/time', 'on'],
+    phrases: ['date', 'datum', 'as of date', 'date and time', 'date/time'],
   },
+  {
+    role: 'issued',
+    strength: 0.7,
+    phrases: ['signed(?: and dated)?(?: on)?', 'registered(?: on)?', 'signature'],
+  },
+  { role: 'periodStart', strength: 0.95, isNear: true, phrases: ['from', 'between', 'du', 'vom'] },
+  {
+    role: 'periodEnd',
+    strength: 0.9,
+    isNear: true,
+    phrases: ['to', 'until', 'through', 'up to(?: and including)?', 'au', 'bis'],
+  },
+  { role: 'other', strength: 0.5, isNear: true, phrases: ['on', 'since', 'by', 'in', 'of'] },
   {
     role: 'due',
     strength: 1,
@@ -88,12 +103,8 @@ const groups: LabelGroup[] = [
       '(?:starts?|starting|begins?|beginning)(?: on| from)?',
       'valid from',
       'cover (?:starts?|begins?|from)',
-      'from',
-      'between',
       'opening (?:balance )?(?:at|on|date)',
       'for the month of',
-      'du',
-      'vom',
       'zeitraum',
     ],
   },
@@ -101,20 +112,14 @@ const groups: LabelGroup[] = [
     role: 'periodEnd',
     strength: 1,
     phrases: [
-      '(?:tax |financial |income |fiscal |accounting |calendar |policy )?(?:year|period|quarter|month|week|half year|six months|twelve months|12 months|3 months)[ -]?(?:ended|ending|end|to)(?: date)?(?: on)?',
+      '(?:for )?(?:the )?(?:tax |financial |income |fiscal |accounting |calendar |policy )?(?:year|period|quarter|month|week|half year|six months|twelve months|12 months|3 months)[ -]?(?:ended|ending|end|to)(?: date)?(?: on)?',
       'period (?:to|end(?:ing|s)?|end date)',
       '(?:statement|balance|closing|ending) (?:closing |closing date|as at|as of|at|on)',
       'closing (?:date|balance (?:at|on|as at))',
       'end(?:ing)? (?:date|balance on|on)',
       'end of (?:tenancy|term|period|lease)',
       'as (?:at|of)',
-      'to',
-      'until',
-      'through',
-      'up to(?: and including)?',
       'pay period end',
-      'au',
-      'bis',
     ],
   },
   {
@@ -191,6 +196,9 @@ const groups: LabelGroup[] = [
       '(?:appointment|commission) expires',
       '(?:member|customer|client|account holder) since',
       'joined',
+      'original (?:[a-z]+ ){0,2}date',
+      'matures?(?: on)?',
+      'marriage of parents',
       'since',
       'rev(?:\\.|ised|ision)?',
       'version',
@@ -219,6 +227,7 @@ const edge = '(?<![a-zà-ÿ0-9])';
 const compiled = groups.map((group) => ({
   role: group.role,
   strength: group.strength,
+  isNear: group.isNear ?? false,
   pattern: new RegExp(
     `${edge}(?:${[...group.phrases].sort((a, b) => b.length - a.length).join('|')})(?![a-zà-ÿ0-9])`,
     'gi',
@@ -228,6 +237,7 @@ const compiled = groups.map((group) => ({
 export interface DateLabel {
   role: LabelRole;
   strength: number;
+  isNear: boolean;
   start: number;
   end: number;
 }
@@ -235,9 +245,15 @@ export interface DateLabel {
 /** The date labels of a line; where two overlap the longer one stays. */
 export function findDateLabels(text: string): DateLabel[] {
   const labels: DateLabel[] = [];
-  for (const { role, strength, pattern } of compiled) {
+  for (const { role, strength, isNear, pattern } of compiled) {
     for (const match of text.matchAll(pattern)) {
-      labels.push({ role, strength, start: match.index, end: match.index + match[0].length });
+      labels.push({
+        role,
+        strength,
+        isNear,
+        start: match.index,
+        end: match.index + match[0].length,
+      });
     }
   }
   labels.sort((a, b) => b.end - b.start - (a.end - a.start) || b.strength - a.strength);

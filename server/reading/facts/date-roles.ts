@@ -37,14 +37,22 @@ function scoreSameLine(date: RoledDate, label: LabelSpot, dates: readonly RoledD
   const between = dates.some((other) => other.start >= label.end && other.end <= date.start);
   const gapText = date.line.text.slice(label.end, date.start);
   const gap = gapText.replace(/[\s:.\-]/g, '').length;
-  if (between) return 0;
-  if (gap > 45) return 0;
-  return label.strength - gap * 0.02;
+  if (between || gap > (label.isNear ? 2 : 45)) return 0;
+  const isProse = label.role === 'issued' && isInProse(date, label);
+  return label.strength - gap * 0.02 - (isProse ? 0.4 : 0);
+}
+
+/** Whether the label stands inside a sentence: "the agreement dated 2 March, and that neither". */
+function isInProse(date: RoledDate, label: LabelSpot): boolean {
+  const lead = date.line.text.slice(0, label.start).trim().split(/\s+/);
+  const small = lead.filter((word) => /^[a-z]{2,}/.test(word)).length;
+  const tail = date.line.text.slice(date.end).trim();
+  return small >= 3 || (lead.length >= 2 && /^[,;]?\s*[a-z]{2,}\s[a-z]{2,}/.test(tail));
 }
 
 /** A label further left on the same level, or above in the same column. */
 function scoreByPlace(date: RoledDate, label: LabelSpot): number {
-  if (label.line.page !== date.line.page) return 0;
+  if (label.line.page !== date.line.page || label.isNear) return 0;
   const height = Math.max(label.box.h, date.box.h, 0.006);
   const sameLevel =
     overlap(label.box.y, label.box.y + label.box.h, date.box.y, date.box.y + date.box.h) >
@@ -101,6 +109,7 @@ export function findRoledDates(
       assignRole(date, labelsByPage.get(date.line.page) ?? [], dates);
     }
     joinPairs(dates);
+    splitColumns(dates);
   }
   return byLine.flat();
 }
@@ -178,6 +187,17 @@ function findLineDates(
     alone: line.text.length - (date.end - date.start) <= 14,
     isRow: false,
   }));
+}
+
+/** Two dates side by side under one heading for a term: the later one is its end. */
+function splitColumns(dates: RoledDate[]): void {
+  const [first, second] = dates;
+  if (!first || !second || second.range !== null || first.value >= second.value) return;
+  if (first.role === 'periodStart' && second.role === 'periodStart') {
+    second.role = 'periodEnd';
+    first.range = 'from';
+    second.range = 'to';
+  }
 }
 
 /** Two dates with a joining word between them are the ends of a period. */

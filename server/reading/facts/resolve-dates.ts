@@ -108,6 +108,16 @@ function pickPeriod(dates: readonly RoledDate[]): [RoledDate | null, RoledDate |
   return start && end && start.value > end.value ? [null, end] : [start, end];
 }
 
+/** A date alone near the top of the first page is the paper's own, as letters print it. */
+function markLetterDates(dates: RoledDate[], classId: string): void {
+  for (const date of dates) {
+    if (date.role !== null || date.isRow || date.precision !== 'day') continue;
+    if (!date.alone || date.line.page !== 1 || date.box.y > 0.45) continue;
+    date.role = 'issued';
+    date.strength = classId === 'personal-letter' ? 0.95 : 0.85;
+  }
+}
+
 /** A date without a label that reads as the paper's own: alone near the top, else alone, else the first. */
 function pickUnlabelled(dates: readonly RoledDate[]): RoledDate | null {
   const free = dates.filter((date) => date.role === null && !date.isRow);
@@ -172,8 +182,9 @@ export function resolveDates(
   const usable = found.map((date) =>
     date.role === 'birth' && classId === 'birth-certificate'
       ? { ...date, role: 'eventDate' as const }
-      : date,
+      : { ...date },
   );
+  markLetterDates(usable, classId);
   const [start, end] = pickPeriod(usable);
   const dates: Dates = {
     issued: factOf(pickBest(usable, 'issued')),

@@ -74,7 +74,9 @@ export function findPrintedTaxYear(
   country: string | null,
 ): string | null {
   const usesSplit = country === 'GB' || country === 'AU';
-  const texts = lines.map((line) => line.text);
+  const texts = lines
+    .map((line) => line.text)
+    .filter((text) => !/\brev(?:\.|ised|ision)/i.test(text));
   const rounds: ((text: string) => string | null)[] = usesSplit
     ? [
         (text) => readSplit(splitNamed.exec(text)),
