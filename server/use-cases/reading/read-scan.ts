@@ -19,7 +19,6 @@ import type { OpenFile, PageReader } from '../../reading/page-reader.ts';
 import { UnreadableFileError } from '../../reading/pages/unreadable-file-error.ts';
 import { readPapers } from '../../reading/papers.ts';
 import type { PageText } from '../../reading/types.ts';
-import { loadAssessContext } from '../assess-paper.ts';
 import { createPapersFromReading } from '../papers/create-papers.ts';
 
 export interface ReadScanDeps extends Pick<Deps, 'clock' | 'config' | 'ruleSet' | 'storage'> {
@@ -115,12 +114,13 @@ async function makePapers(scan: ScanRow, deps: ReadScanDeps): Promise<void> {
     const pages = await listScanPages(scan.id, transaction);
     if (pages.some((page) => page.paperId !== null)) return;
     const readings = readPapers(pages.map(toPageText), context);
-    const day = { today: deps.clock.todayIn(household.timeZone), ruleSet: deps.ruleSet };
     const ids = await createPapersFromReading(
-      scan,
-      pages,
-      readings,
-      await loadAssessContext(household.id, day, transaction),
+      { scan, household, pages, readings },
+      {
+        today: deps.clock.todayIn(household.timeZone),
+        now: deps.clock.now(),
+        ruleSet: deps.ruleSet,
+      },
       transaction,
     );
     await updateScan(
