@@ -7,12 +7,16 @@ export function fitText(face: Typeface, text: string, size: number, width: numbe
   const clean = face.clean(text);
   if (face.measure(clean, size) <= width) return clean;
   const letters = [...clean];
-  while (letters.length > 0) {
-    letters.pop();
-    const cut = `${letters.join('').trimEnd()}${ellipsis}`;
-    if (face.measure(cut, size) <= width) return cut;
+  const cutAt = (count: number) => `${letters.slice(0, count).join('').trimEnd()}${ellipsis}`;
+  // The longest beginning that fits lies between one that does and one that does not.
+  let fits = 0;
+  let tooLong = letters.length;
+  while (tooLong - fits > 1) {
+    const half = Math.floor((fits + tooLong) / 2);
+    if (face.measure(cutAt(half), size) <= width) fits = half;
+    else tooLong = half;
   }
-  return '';
+  return fits === 0 ? '' : cutAt(fits);
 }
 
 /**
@@ -47,16 +51,19 @@ export function wrapText(
   return kept;
 }
 
+/** Breaks after a dot, hyphen, slash, at sign or underscore where there is one, else between letters. */
 function breakWord(face: Typeface, word: string, size: number, width: number): string[] {
   if (face.measure(word, size) <= width) return [word];
   const pieces: string[] = [];
   let piece = '';
-  for (const letter of word) {
-    if (piece && face.measure(piece + letter, size) > width) {
-      pieces.push(piece);
-      piece = letter;
-    } else {
-      piece += letter;
+  for (const part of word.split(/(?<=[-./@_])/)) {
+    for (const fragment of face.measure(part, size) <= width ? [part] : part) {
+      if (piece && face.measure(piece + fragment, size) > width) {
+        pieces.push(piece);
+        piece = fragment;
+      } else {
+        piece += fragment;
+      }
     }
   }
   pieces.push(piece);

@@ -41,7 +41,7 @@ export class Printout {
   readonly #faces: Record<Weight, Typeface>;
   readonly #footer: Footer | null;
   #page: PDFPage;
-  #hasMissing = false;
+  readonly #pagesWithMissing = new Set<PDFPage>();
 
   private constructor(
     document: PDFDocument,
@@ -96,7 +96,7 @@ export class Printout {
     const face = this.face(style.weight);
     const words = width === undefined ? face.clean(text) : fitText(face, text, style.size, width);
     if (words === '') return;
-    if (words.includes(missingSign)) this.#hasMissing = true;
+    if (words.includes(missingSign)) this.#pagesWithMissing.add(this.#page);
     const align = style.align ?? 'left';
     const length = align === 'left' ? 0 : face.measure(words, style.size);
     this.#page.drawText(words, {
@@ -203,7 +203,9 @@ export class Printout {
     this.write(pageWords, this.right, y, { ...style, align: 'right' });
     const second = [
       footer.middle ?? '',
-      this.#hasMissing ? `${missingSign} stands for a character that this page cannot print.` : '',
+      this.#pagesWithMissing.has(this.#page)
+        ? `${missingSign} stands for a character that this page cannot print.`
+        : '',
     ];
     this.write(second.filter(Boolean).join('  '), this.left, y + 10, style, this.innerWidth);
   }

@@ -15,6 +15,7 @@ export type Weight = keyof typeof files;
 /** Stands for a character that the face does not have (Unicode: REPLACEMENT CHARACTER). */
 export const missingSign = '\uFFFD';
 
+const unitSize = 1000;
 const graphemes = new Intl.Segmenter('en', { granularity: 'grapheme' });
 const fileCache = new Map<Weight, Promise<Uint8Array>>();
 
@@ -43,10 +44,23 @@ async function embedTypeface(document: PDFDocument, weight: Weight): Promise<Typ
     features: { liga: false, clig: false, dlig: false },
   });
   const known = new Set(font.getCharacterSet());
+  // Laying a word out is slow and long lists say the same words again and again; widths grow with the size.
+  const widths = new Map<string, number>();
+  const measureWord = (word: string) => {
+    const seen = widths.get(word);
+    if (seen !== undefined) return seen;
+    const width = font.widthOfTextAtSize(word, unitSize) / unitSize;
+    widths.set(word, width);
+    return width;
+  };
   return {
     font,
     clean: (text) => cleanText(text, known),
-    measure: (text, size) => font.widthOfTextAtSize(text, size),
+    measure: (text, size) => {
+      const words = text.split(' ');
+      const letters = words.reduce((sum, word) => sum + measureWord(word), 0);
+      return (letters + (words.length - 1) * measureWord(' ')) * size;
+    },
   };
 }
 
