@@ -1,0 +1,215 @@
+/** The story that the demo's two households tell; the papers are those of `tests/fixtures/demo`. */
+import type { z } from 'zod';
+import type { createHouseholdSchema } from '../../contract/households.ts';
+import type { enterPaperSchema, UpdatePaper } from '../../contract/papers.ts';
+
+export interface DemoPaper {
+  /** File in the household's folder. */
+  file: string;
+  /** What a person decided; absent: it waits on the review desk. */
+  decision?: UpdatePaper;
+  hold?: { kind: 'claim'; reason: string };
+}
+
+export interface DemoBox {
+  label: string;
+  area: string;
+  /** Read while the demo is set up. */
+  papers: DemoPaper[];
+  /** Left to the worker: waits on the desk soon after the start. */
+  piles: string[];
+}
+
+export interface DemoHousehold {
+  folder: string;
+  roles: ('assistant' | 'client' | 'adviser')[];
+  household: z.input<typeof createHouseholdSchema>;
+  boxes: DemoBox[];
+  /** Entered by hand, with what was decided. */
+  entered: { paper: z.input<typeof enterPaperSchema>; decision?: UpdatePaper }[];
+  filings: { taxYear: string; answer: 'on-time' | 'on-day'; filedOn?: string }[];
+}
+
+/** @param passportExpiresOn a day within the usual notice, so that a reminder goes out */
+export function describeDemoHouseholds(passportExpiresOn: string): DemoHousehold[] {
+  return [
+    {
+      folder: 'pennelow',
+      roles: ['assistant', 'client', 'adviser'],
+      household: {
+        name: 'Pennelow',
+        country: 'GB',
+        region: 'england-wales',
+        timeZone: 'Europe/London',
+        people: [
+          { name: 'Leonard Arthur Pennelow', birthDate: '1951-05-17' },
+          { name: 'Winifred Joan Pennelow', birthDate: '1953-11-09' },
+        ],
+        circumstances: {
+          selfEmployed: { answer: 'no' },
+          landlord: { answer: 'yes', from: '1989-03-01' },
+          company: { answer: 'no' },
+          vatRegistered: { answer: 'no' },
+          employer: { answer: 'no' },
+          filesReturn: { answer: 'yes' },
+          attorneyActing: { answer: 'no' },
+          capacityInDoubt: { answer: 'no' },
+        },
+        hopes: 'The bureau to close again, and to know where the passports are.',
+      },
+      boxes: [
+        {
+          label: 'Study shelf',
+          area: 'Study',
+          piles: [],
+          papers: [
+            {
+              file: 'IMG_090.jpg',
+              decision: { pile: 'file-here', keptBecause: 'use', place: 'Bureau, top drawer' },
+            },
+            {
+              file: 'scan-030.pdf',
+              decision: {
+                pile: 'file-elsewhere',
+                keptBecause: 'duty',
+                place: 'With the solicitor',
+              },
+            },
+            {
+              file: 'scan-047.pdf',
+              decision: { pile: 'file-here', keptBecause: 'use', place: 'Blue folder' },
+            },
+            {
+              file: 'scan-018.pdf',
+              decision: { pile: 'file-here', keptBecause: 'use', place: 'Blue folder' },
+            },
+            {
+              file: 'scan-058.pdf',
+              decision: { pile: 'file-here', keptBecause: 'duty', place: 'Blue folder' },
+            },
+            { file: 'scan-011.jpg', decision: { pile: 'recycle' } },
+            { file: 'scan-080.jpg', decision: { pile: 'shred' } },
+            {
+              file: 'scan-010.pdf',
+              decision: { pile: 'file-here', keptBecause: 'duty', place: 'Blue folder' },
+              hold: { kind: 'claim', reason: 'The claim for the burst pipe is not settled yet.' },
+            },
+          ],
+        },
+        {
+          label: 'Bureau',
+          area: 'Study',
+          papers: [
+            { file: 'scan-104.pdf' },
+            { file: 'scan-085.pdf' },
+            { file: 'scan-017.pdf' },
+            { file: 'scan-078.pdf' },
+          ],
+          piles: ['pile-a.pdf'],
+        },
+        { label: 'Hall cupboard', area: 'Hall', papers: [], piles: [] },
+      ],
+      entered: [
+        {
+          paper: {
+            class: 'passport',
+            title: "Winifred's passport, in the bureau",
+            facts: { dates: { expiry: passportExpiresOn }, addressee: 'Winifred Joan Pennelow' },
+            place: 'Bureau, top drawer',
+          },
+          decision: { pile: 'file-here', keptBecause: 'use' },
+        },
+        {
+          paper: {
+            class: 'bank-statement',
+            title: 'Bank statements 2009 to 2014',
+            bundle: true,
+            bundleFrom: '2009-01-31',
+            bundleTo: '2014-12-31',
+            sheets: 60,
+            facts: {
+              dates: { periodStart: '2009-01-01', periodEnd: '2014-12-31' },
+              issuer: 'Corbel & Tarn Bank plc',
+            },
+          },
+          decision: { pile: 'shred', answers: { usedForTax: false, endedOn: '2014-12-31' } },
+        },
+        {
+          paper: {
+            class: 'utility-bill',
+            title: 'Electricity and gas bills 2012 to 2016',
+            bundle: true,
+            bundleFrom: '2012-02-01',
+            bundleTo: '2016-11-30',
+            sheets: 44,
+            facts: { dates: { issued: '2016-11-30' }, issuer: 'Normoor Energy' },
+          },
+          decision: { pile: 'shred', answers: { usedForTax: false } },
+        },
+        {
+          paper: {
+            class: 'keepsake',
+            title: 'Letters from Martin at university',
+            sheets: 12,
+            place: 'Cedar chest',
+          },
+          decision: { pile: 'file-here', keptBecause: 'dear' },
+        },
+      ],
+      filings: [{ taxYear: '2024-25', answer: 'on-time' }],
+    },
+    {
+      folder: 'tarrow',
+      roles: ['assistant'],
+      household: {
+        name: 'Tarrow',
+        country: 'GB',
+        region: 'england-wales',
+        timeZone: 'Europe/London',
+        businessNames: ['Tarrow Gardens'],
+        people: [
+          { name: 'Callum Reid Tarrow', birthDate: '1984-08-02' },
+          { name: 'Aoife Tarrow', birthDate: '1986-02-21' },
+          { name: 'Finn Callum Tarrow', birthDate: '2013-03-14' },
+          { name: 'Maeve Rose Tarrow', birthDate: '2017-06-30' },
+        ],
+        circumstances: {
+          selfEmployed: { answer: 'yes', from: '2015-04-06' },
+          vatRegistered: { answer: 'yes' },
+          employer: { answer: 'yes' },
+          filesReturn: { answer: 'yes' },
+        },
+        hopes: 'A kitchen table without papers on it.',
+      },
+      boxes: [
+        {
+          label: 'Kitchen drawer',
+          area: 'Kitchen',
+          papers: [
+            {
+              file: 'scan-067.pdf',
+              decision: { pile: 'file-here', keptBecause: 'duty', place: 'Red folder' },
+            },
+            {
+              file: 'scan-053.pdf',
+              decision: { pile: 'file-here', keptBecause: 'use', place: 'Red folder' },
+            },
+            {
+              file: 'download-072.pdf',
+              decision: { pile: 'file-here', keptBecause: 'duty', place: 'Business drawer' },
+            },
+            {
+              file: 'download-008.pdf',
+              decision: { pile: 'file-here', keptBecause: 'duty', place: 'Business drawer' },
+            },
+            { file: 'scan-048.pdf' },
+            { file: 'scan-087.pdf' },
+          ],
+          piles: ['pile-b.pdf'],
+        },
+      ],
+      entered: [],
+      filings: [{ taxYear: '2024-25', answer: 'on-time' }],
+    },
+  ];
+}
