@@ -1,4 +1,5 @@
 /** From a page as it lies in the file to an evened-out, upright page and the maps between the two. */
+import { cleanFax } from './fax-clean.ts';
 import { flattenLight } from './flatten.ts';
 import { liesOnSide } from './orientation.ts';
 import { measurePage, scaleShape, type PageShape } from './page-shape.ts';
@@ -135,7 +136,11 @@ export function makeReadingImage(page: PreparedPage): ReadingImage {
     scaleAndShift(scale, content.left, content.top),
   );
   const sampled = sampleGrey(page.grey, map, width, height);
-  const grey = page.twoTone ? sampled : flattenLight(sampled);
+  const grey = page.twoTone
+    ? process.env.NOFAX
+      ? sampled
+      : cleanFax(sampled)
+    : flattenLight(sampled);
   return { grey, scale, left: content.left, top: content.top };
 }
 
