@@ -24,7 +24,8 @@ export interface DateReadingOptions {
 }
 
 const digit = '[0-9OoIl|SB]';
-const day = `(${digit}{1,2})(?:st|nd|rd|th|er|\\.)?`;
+const twoDigits = `(?:\\d${digit}?|[OoIl|SB]\\d|[Il|](?=\\s))`;
+const day = `(${twoDigits})(?:st|nd|rd|th|er|\\.)?`;
 const month = '([A-Za-zÀ-ÿ0|]{3,10})\\.?';
 const year = '((?:[12l|I][90O]' + digit + "{2})|'?\\d{2}(?![\\d:]))";
 const fullYear = '([12l|I][90O]' + digit + '{2})';
@@ -43,30 +44,30 @@ const patterns = {
     'g',
   ),
   spaced: new RegExp(
-    `(?<![A-Za-z0-9£$€/.,-]|\\d )(\\d{2})\\s(\\d{2})\\s((?:19|20)\\d{2})(?![A-Za-z0-9]| ?\\d)`,
+    `(?<![A-Za-z0-9£$€/.,-]|\\d )(\\d{2})(?:\\s(\\d{2})\\s?|(\\d{2})\\s)((?:19|20)\\d{2})(?![A-Za-z0-9]| ?\\d)`,
     'g',
   ),
   dayMonthYear: new RegExp(
     `${before}${day}[\\s-]*(?:day\\s+)?(?:of\\s+)?${month}(?:\\s?/\\s?[A-Za-zÀ-ÿ]{3,9}\\.?)?${sep}-?\\s?${year}${after}`,
-    'g',
+    'gi',
   ),
   monthDayYear: new RegExp(
     `(?<![A-Za-z])${month}\\s*${day}(?:\\s*[,.]\\s*|\\s+)${year}${after}`,
-    'g',
+    'gi',
   ),
-  yearMonthDay: new RegExp(`${before}${fullYear}[\\s-]+${month}[\\s-]+${day}${after}`, 'g'),
+  yearMonthDay: new RegExp(`${before}${fullYear}[\\s-]+${month}[\\s-]+${day}${after}`, 'gi'),
   rangeDayFirst: new RegExp(
     `${before}${day}\\s*(?:([A-Za-z]{3,9})\\.?)?${join}${day}\\s*(?:of\\s+)?${month}${sep}${fullYear}${after}`,
-    'g',
+    'gi',
   ),
   rangeMonthFirst: new RegExp(
     `(?<![A-Za-z])${month}\\s*${day}${join}(?:([A-Za-z]{3,9})\\.?\\s*)?${day}\\s*,?\\s*${fullYear}${after}`,
-    'g',
+    'gi',
   ),
   words:
     /((?:twenty|thirty)?[\s-]?[a-z]{2,11}(?:st|nd|rd|th))\s+day\s+of\s+([A-Za-z]{3,9}),?\s+(?:in the year\s+)?(?:of our Lord\s+)?(?:A\.?\s?D\.?\s+)?((?:[12]\d{3})|(?:(?:one|two|nineteen|twenty)[\sA-Za-z-]{0,40}))/gi,
   monthYear: new RegExp(
-    `(?<![A-Za-z0-9]|\\d )([A-Za-zÀ-ÿ]{3,10})\\.?,?\\s+((?:19|20)\\d{2})(?![\\d/-]\\d|\\d)`,
+    `(?<![A-Za-z0-9]|(?:^|[\\s(])\\d{1,2} )([A-Za-zÀ-ÿ]{3,10})\\.?,?\\s+((?:19|20)\\d{2})(?![\\d/-]\\d|\\d)`,
     'g',
   ),
   season: /\b(spring|summer|autumn|fall|winter)\s+((?:19|20)\d{2})\b/gi,
@@ -212,7 +213,8 @@ function collectNumeric(text: string, dayFirst: boolean, found: Found[]): void {
     found.push({ ...decided, start: match.index, end: match.index + all.length });
   }
   for (const match of text.matchAll(patterns.spaced)) {
-    const [all, a = '', b = '', y = ''] = match;
+    const [all, a = '', spacedB, gluedB, y = ''] = match;
+    const b = spacedB ?? gluedB ?? '';
     const decided = decideDayMonth(Number(a), Number(b), Number(y), dayFirst);
     found.push({ ...decided, start: match.index, end: match.index + all.length });
   }

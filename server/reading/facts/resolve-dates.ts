@@ -8,7 +8,13 @@ import { isPeriodClass } from './key-date.ts';
 import { findYearlessRange } from './parse-dates.ts';
 import { letterConfidence } from './paper-lines.ts';
 import type { PaperLine } from './paper-lines.ts';
-import { findLoneYear, findPrintedTaxYear, findTaxYearSpan, taxYearOf } from './tax-year.ts';
+import {
+  findLoneYear,
+  findPartOfYear,
+  findPrintedTaxYear,
+  findTaxYearSpan,
+  taxYearOf,
+} from './tax-year.ts';
 
 type Dates = Facts['dates'];
 
@@ -46,6 +52,8 @@ const statements: ReadonlySet<string> = new Set<ClassId>([
   'card-statement',
   'investment-statement',
 ]);
+
+const partOfYear: ReadonlySet<string> = new Set<ClassId>(['payroll-record', 'sales-tax-return']);
 
 const oneDay: ReadonlySet<string> = new Set<ClassId>([
   'vehicle-service',
@@ -118,6 +126,51 @@ function markLetterDates(dates: RoledDate[], classId: string): void {
   }
 }
 
+/** A deed's own day is the day it was recorded, stamped at its head; the signing is the event. */
+function markRecordingStamp(dates: RoledDate[]): void {
+  const stamp = dates.find(
+    (date) =>
+      date.line.page === 1 &&
+      date.box.y < 0.25 &&
+      (date.role === null || date.role === 'issued') &&
+      /\d{1,2}:\d{2}|record|register|filed|stamp/i.test(date.line.text),
+  );
+  if (!stamp) return;
+  for (const date of dates) {
+    if (date !== stamp && date.role === 'issued' && /dated|signed|made/i.test(date.label ?? '')) {
+      date.role = 'eventDate';
+    }
+  }
+  stamp.role = 'issued';
+  stamp.strength = 1.05;
+}
+
+/** The words in a sentence that tell of the day the paper is about, by class. */
+const eventWords: Partial<Record<ClassId, RegExp>> = {
+  'loan-settlement':
+    /final payment|in full|paid off|repaid|settled|satisfied|cleared|closed|discharged|redeemed|paid out/i,
+  'employment-contract': /start|begin|commence|join|first day|employ/i,
+  'death-certificate': /died|death|passed away/i,
+  'marriage-certificate': /married|marriage|solemni|ceremony|wed|civil partner/i,
+};
+
+/** Days in running text that tell of the event, where no label names one. */
+function markEventsInText(dates: RoledDate[], lines: readonly PaperLine[], classId: string): void {
+  const known: Partial<Record<string, RegExp>> = eventWords;
+  const words = known[classId];
+  if (!words || dates.some((date) => date.role === 'eventDate' && date.strength > 0.6)) return;
+  for (const date of dates) {
+    if (date.role === 'issued' && date.alone) continue;
+    if (date.role !== null && date.role !== 'other' && date.role !== 'periodStart') continue;
+    if (date.role === 'other' && date.strength > 0.8) continue;
+    const before = lines[date.line.index - 1];
+    const lead = before && before.page === date.line.page ? before.text : '';
+    if (!words.test(date.line.text) && !words.test(lead)) continue;
+    date.role = 'eventDate';
+    date.strength = words.test(date.line.text) ? 0.8 : 0.6;
+  }
+}
+
 /** A date without a label that reads as the paper's own: alone near the top, else alone, else the first. */
 function pickUnlabelled(dates: readonly RoledDate[]): RoledDate | null {
   const free = dates.filter((date) => date.role === null && !date.isRow);
@@ -185,6 +238,8 @@ export function resolveDates(
       : { ...date },
   );
   markLetterDates(usable, classId);
+  if (classId === 'property-deed') markRecordingStamp(usable);
+  markEventsInText(usable, lines, classId);
   const [start, end] = pickPeriod(usable);
   const dates: Dates = {
     issued: factOf(pickBest(usable, 'issued')),
@@ -245,7 +300,8 @@ function addImplied(
     dates.periodEnd ??= dates.expiry;
   }
   if (taxYear && isPeriodClass(classId)) {
-    const span = findTaxYearSpan(taxYear, country);
+    const part = partOfYear.has(classId) ? findPartOfYear(lines, taxYear, country) : null;
+    const span = part ?? findTaxYearSpan(taxYear, country);
     if (span && !dates.periodEnd) {
       dates.periodEnd = implied(span.end, null, 0.7);
       dates.periodStart ??= implied(span.start, null, 0.7);

@@ -1,6 +1,6 @@
 /** Tax years in words, and their first and last days. */
 import type { IsoDate } from '../../contract/dates.ts';
-import { findIsoDate, splitIsoDate } from './calendar-days.ts';
+import { addDays, addMonths, findIsoDate, splitIsoDate } from './calendar-days.ts';
 import type { PaperLine } from './paper-lines.ts';
 
 /** `2025-26` for the year that begins in 2025. */
@@ -110,6 +110,34 @@ export function findLoneYear(lines: readonly PaperLine[]): string | null {
   for (const line of top) {
     const match = /(?:^|\s)((?:19|20)\d{2})(?=\s|$)/.exec(line.text);
     if (match?.[1] && line.text.length <= 60) return match[1];
+  }
+  return null;
+}
+
+/**
+ * The last day of a part of a tax year that a payroll or sales tax paper names: "quarter 2", "month 7".
+ * GB tax quarters and months run from the 6th to the 5th; elsewhere they are those of the tax year's
+ * calendar. Null when none is named.
+ */
+export function findPartOfYear(
+  lines: readonly PaperLine[],
+  taxYear: string,
+  country: string | null,
+): { start: IsoDate; end: IsoDate } | null {
+  const span = findTaxYearSpan(taxYear, country);
+  if (!span) return null;
+  for (const line of lines.slice(0, 30)) {
+    const match =
+      /\b(?:tax )?(quarter|month|qtr|q)\s*(?:no\.?\s*|number\s*)?([1-9]|1[0-2])\b(?!\s*(?:to|-|–))/i.exec(
+        line.text,
+      );
+    if (!match) continue;
+    const isQuarter = /^q/i.test(match[1] ?? '');
+    const count = Number(match[2]);
+    if (isQuarter && count > 4) continue;
+    const length = isQuarter ? 3 : 1;
+    const start = addMonths(span.start, (count - 1) * length);
+    return { start, end: addDays(addMonths(start, length), -1) };
   }
   return null;
 }
