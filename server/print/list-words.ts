@@ -30,8 +30,8 @@ export function describeRule(row: ShredRow): Cell {
       size: 8.25,
     },
   ];
-  const rule = [row.rule, row.ruleBasis ? sayBasis(row.ruleBasis) : null].filter(Boolean);
-  if (rule.length > 0) pieces.push({ text: rule.join(', '), size: 7.5, ink: 'quiet' });
+  if (row.ruleBasis) pieces.push({ text: sayBasis(row.ruleBasis), size: 7.5, ink: 'quiet' });
+  if (row.rule) pieces.push({ text: row.rule, size: 7, ink: 'quiet' });
   if (row.sourceNote) pieces.push({ text: row.sourceNote, size: 7.5, ink: 'amber', mostLines: 3 });
   return { kind: 'text', pieces };
 }

@@ -16,6 +16,31 @@ export type Weight = keyof typeof files;
 export const missingSign = '\uFFFD';
 
 const unitSize = 1000;
+/** No ligatures, so that copied text has its letters; no shifting, which the PDF writer would not use anyway. */
+const features = {
+  liga: false,
+  clig: false,
+  kern: false,
+  mark: false,
+  mkmk: false,
+  dist: false,
+  abvm: false,
+  blwm: false,
+};
+/** The font tool, except that a text is laid out once: long lists say the same words again and again. */
+const rememberingFontkit: Parameters<PDFDocument['registerFontkit']>[0] = {
+  create(bytes, name) {
+    const font = fontkit.create(bytes, name);
+    const layout = font.layout.bind(font);
+    const seen = new Map<string, ReturnType<typeof layout>>();
+    font.layout = (text, wanted) => {
+      const run = seen.get(text) ?? layout(text, wanted);
+      seen.set(text, run);
+      return run;
+    };
+    return font;
+  },
+};
 const graphemes = new Intl.Segmenter('en', { granularity: 'grapheme' });
 const fileCache = new Map<Weight, Promise<Uint8Array>>();
 
@@ -30,7 +55,7 @@ export interface Typeface {
 
 /** Embeds both weights in a document. */
 export async function embedTypefaces(document: PDFDocument): Promise<Record<Weight, Typeface>> {
-  document.registerFontkit(fontkit);
+  document.registerFontkit(rememberingFontkit);
   return {
     regular: await embedTypeface(document, 'regular'),
     strong: await embedTypeface(document, 'strong'),
@@ -38,24 +63,16 @@ export async function embedTypefaces(document: PDFDocument): Promise<Record<Weig
 }
 
 async function embedTypeface(document: PDFDocument, weight: Weight): Promise<Typeface> {
-  // No ligatures, so that text copied out of the page has the letters it was written with.
   const font = await document.embedFont(await loadFile(weight), {
     subset: true,
-    features: { liga: false, clig: false, dlig: false },
+    features,
   });
   const known = new Set(font.getCharacterSet());
-  // Laying a word out is slow and long lists say the same words again and again; widths grow with the size.
-  const widths = new Map<string, number>();
-  const measureWord = (word: string) => {
-    const seen = widths.get(word);
-    if (seen !== undefined) return seen;
-    const width = font.widthOfTextAtSize(word, unitSize) / unitSize;
-    widths.set(word, width);
-    return width;
-  };
+  const measureWord = (word: string) => font.widthOfTextAtSize(word, unitSize) / unitSize;
   return {
     font,
     clean: (text) => cleanText(text, known),
+    // Word by word, since words come again more often than whole lines; widths grow with the size.
     measure: (text, size) => {
       const words = text.split(' ');
       const letters = words.reduce((sum, word) => sum + measureWord(word), 0);
