@@ -8,10 +8,10 @@ export async function insertPaperChange(
   change: Pick<
     PaperChangeRow,
     'householdId' | 'paperId' | 'version' | 'before' | 'sentence' | 'userId' | 'at'
-  >,
+  > & { undone?: boolean },
   transaction: Transaction,
 ): Promise<void> {
-  await PaperChangeModel.create({ ...change, undone: false }, { transaction });
+  await PaperChangeModel.create({ undone: false, ...change }, { transaction });
 }
 
 /** Newest first. */

@@ -2,31 +2,38 @@
 import type { ReadingContext, PaperReading, PageText } from '../../reading/types.ts';
 import { takeNumbers } from '../../db/repositories/household-repository.ts';
 import { assignPages, type StoredPage } from '../../db/repositories/page-repository.ts';
-import { insertPapers, type NewPaper } from '../../db/repositories/paper-repository.ts';
+import {
+  type AssessedColumns,
+  insertPapers,
+  type NewPaper,
+} from '../../db/repositories/paper-repository.ts';
 import type { Transaction } from '../../db/transaction.ts';
-import type { AssessContext } from '../assess-paper.ts';
-import { assessPaper } from '../assess-paper.ts';
+import {
+  type AssessContext,
+  type AssessDay,
+  assessPaper,
+  loadAssessContext,
+} from '../assess-paper.ts';
 
 export interface ReadScan {
-  id: string;
-  householdId: string;
-  boxId: string;
+  scan: { id: string; householdId: string; boxId: string };
+  household: { country: string };
+  /** The stored pages of the scan. */
+  pages: StoredPage[];
+  readings: PaperReading[];
 }
 
 /**
- * Adds the papers of a scan that was read: running numbers, pages, assessment, likely copies.
- * @param pages the stored pages of the scan
- * @param context from `loadAssessContext` in the same transaction
- * @returns the ids in the order of the readings
+ * Adds the papers of a scan that was read: running numbers, pages, assessment, likely copies. Answers their ids
+ * in the order of the readings.
  */
 export async function createPapersFromReading(
-  scan: ReadScan,
-  pages: StoredPage[],
-  readings: PaperReading[],
-  context: AssessContext & { household: { country: string } },
+  { scan, household, pages, readings }: ReadScan,
+  day: AssessDay & { now: Date },
   transaction: Transaction,
 ): Promise<string[]> {
   if (readings.length === 0) return [];
+  const context = await loadAssessContext(scan.householdId, day, transaction);
   const isDuplex = pages.some((page) => page.blank && page.number % 2 === 0);
   const first = await takeNumbers(
     scan.householdId,
@@ -43,11 +50,18 @@ export async function createPapersFromReading(
       .sort((a, b) => a.number - b.number);
   const papers = await insertPapers(
     readings.map((reading, index) =>
-      paperOfReading(scan, reading, pagesOf(reading), {
-        number: first + index,
-        isDuplex,
+      paperOfReading(
+        {
+          ...columnsOfReading(reading, pagesOf(reading), household.country),
+          householdId: scan.householdId,
+          boxId: scan.boxId,
+          scanId: scan.id,
+          number: first + index,
+          sheets: countSheets(pagesOf(reading).length, isDuplex),
+          createdAt: day.now,
+        },
         context,
-      }),
+      ),
     ),
     transaction,
   );
@@ -64,24 +78,15 @@ export async function createPapersFromReading(
 }
 
 function paperOfReading(
-  scan: ReadScan,
-  reading: PaperReading,
-  pages: StoredPage[],
-  { number, isDuplex, context }: { number: number; isDuplex: boolean; context: AssessContext },
+  columns: Omit<NewPaper, keyof AssessedColumns>,
+  context: AssessContext,
 ): NewPaper {
-  const paper = {
-    ...columnsOfReading(reading, pages, context.household.country),
-    householdId: scan.householdId,
-    boxId: scan.boxId,
-    scanId: scan.id,
-    number,
-    status: 'to-review' as const,
-    sheets: countSheets(pages.length, isDuplex),
-  };
   const assessed = assessPaper(
     {
-      ...paper,
       id: null,
+      class: columns.class,
+      country: columns.country,
+      facts: columns.facts,
       answers: {},
       subjectId: null,
       bundle: false,
@@ -91,7 +96,7 @@ function paperOfReading(
     },
     context,
   );
-  return { ...paper, ...assessed };
+  return { ...columns, ...assessed, status: 'to-review' };
 }
 
 /** The columns that come from the reader; they are the same when a paper is split or joined by hand. */
