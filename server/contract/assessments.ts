@@ -10,6 +10,7 @@ export const sourceStatusSchema = z.enum(sourceStatuses);
 export const disposals = ['shred', 'recycle', 'return', 'keep', 'review'] as const;
 export const securityLevels = ['P-1', 'P-2', 'P-3', 'P-4', 'P-5', 'P-6', 'P-7'] as const;
 export const securityLevelSchema = z.enum(securityLevels);
+export type SecurityLevel = z.infer<typeof securityLevelSchema>;
 export const originals = ['required', 'scan-is-enough', 'conditional'] as const;
 
 export const sourceSchema = z.object({

@@ -86,3 +86,9 @@ export async function listAreas(householdId: string) {
     { bind: { householdId }, type: QueryTypes.SELECT },
   );
 }
+
+/** Codes of a household's boxes by id. */
+export async function listBoxCodes(householdId: string): Promise<Map<string, string>> {
+  const boxes = await BoxModel.findAll({ where: { householdId }, attributes: ['id', 'code'] });
+  return new Map(boxes.map((box) => [box.id, box.code]));
+}
