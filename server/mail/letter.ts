@@ -74,7 +74,9 @@ function writeTextPart(part: LetterPart): string {
     case 'heading':
       return part.words;
     case 'lines':
-      return part.lines.map(({ lead, detail }) => `- ${lead}: ${detail}`).join('\n');
+      return part.lines
+        .map(({ lead, detail }) => wrapWords(`${lead}: ${detail}`, '- ', '  '))
+        .join('\n');
     case 'quote':
       return wrapWords(part.words, '> ');
     case 'link':
@@ -83,7 +85,7 @@ function writeTextPart(part: LetterPart): string {
 }
 
 /** Breaks at 76 columns, as mail readers for plain text expect; a longer word stays whole. */
-function wrapWords(words: string, prefix = ''): string {
+function wrapWords(words: string, prefix = '', laterPrefix = prefix): string {
   const lines: string[] = [];
   let line = '';
   for (const word of words.split(/\s+/)) {
@@ -95,7 +97,7 @@ function wrapWords(words: string, prefix = ''): string {
     }
   }
   lines.push(line);
-  return lines.map((one) => `${prefix}${one}`).join('\n');
+  return lines.map((one, index) => `${index === 0 ? prefix : laterPrefix}${one}`).join('\n');
 }
 
 // The quiet colours of the application, written out because mail readers know no style sheet.
