@@ -45,6 +45,7 @@ export function reminderKey(kind: Reminder['kind'], paperId: string, about: IsoD
  *
  * Those told are the clients whose rights let them see the paper. Where no client can be told of a paper,
  * the owners of the practice are, so that no date passes unseen. Assistants and advisers are never told.
+ * A paper for one person's eyes is told to that person or to nobody.
  */
 export function dueReminders(input: {
   papers: readonly DatedPaper[];
@@ -143,8 +144,11 @@ function isMemberOn({ membership }: ReminderPerson, today: IsoDate): boolean {
 
 function choosePeople(people: readonly ReminderPerson[], paper: DatedPaper): ReminderPerson[] {
   const group = requireClass(paper.class).group;
-  const readers = people.filter((person) =>
-    reaches(reachOf(person.membership, 'reminder:read'), group),
+  const eyes = paper.eyesOnlyUserId ?? null;
+  const readers = people.filter(
+    (person) =>
+      (eyes === null || eyes === person.userId) &&
+      reaches(reachOf(person.membership, 'reminder:read'), group),
   );
   const clients = readers.filter((person) => person.membership.role === 'client');
   const told =

@@ -25,6 +25,8 @@ export type DatedPaper = Pick<
 > & {
   /** A person stepped down from "advised until"; the rule's own date counts then. */
   isSteppedDown?: boolean;
+  /** The paper is for this person's eyes only. */
+  eyesOnlyUserId?: string | null;
 };
 
 export interface PaperDate {

@@ -154,6 +154,19 @@ describe('who is told', () => {
     expect(told([makePerson('ada', { startsOn: '2027-02-02' })], '2027-02-01')).toEqual([]);
   });
 
+  test('only the person for whose eyes the paper is, never another in their stead', () => {
+    const eyesOnly = (userId: string) =>
+      dueReminders({
+        papers: [{ ...statement, eyesOnlyUserId: userId }],
+        people: [ada, makePerson('ben'), owner],
+        household,
+        today: '2027-02-01',
+      }).map((candidate) => candidate.userId);
+    expect(eyesOnly('ben')).toEqual(['ben']);
+    expect(eyesOnly('owner')).toEqual(['owner']);
+    expect(eyesOnly('somebody-else')).toEqual([]);
+  });
+
   test('one who belongs twice, once', () => {
     expect(told([ada, { ...ada }])).toEqual(['ada']);
   });
