@@ -79,7 +79,7 @@ export async function printDestructionRecord(input: DestructionRecordPrint): Pro
       name: 'Who watched',
       words: `${destruction.witness}; the client was ${destruction.clientPresent ? '' : 'not '}present`,
     },
-    { name: 'Recorded by', words: `${destruction.recordedByName} for ${practiceName}` },
+    { name: 'Recorded by', words: destruction.recordedByName },
     { name: 'Approval', words: describeApproval(list).join(' ') || 'None on record' },
   ]);
   y = drawTable(
@@ -118,7 +118,7 @@ function planColumns(innerWidth: number): Column[] {
     { heading: 'Date on it', width: fixed.date },
     { heading: 'Rule and date that allowed it', width: fixed.rule },
     { heading: 'Sheets', width: fixed.sheets, align: 'right' },
-    { heading: 'What became of it', width: fixed.outcome },
+    { heading: 'Outcome', width: fixed.outcome },
   ];
 }
 

@@ -25,7 +25,7 @@ export function describePaper(row: ShredRow): Cell {
 export function describeRule(row: ShredRow): Cell {
   const pieces: CellText[] = [
     {
-      text: row.keepUntil ? `Keep until ${sayDay(row.keepUntil)}` : 'Need not be kept',
+      text: row.keepUntil ? `Keep until ${sayDay(row.keepUntil)}` : 'No keep-until date',
       weight: 'strong',
       size: 8.25,
     },

@@ -189,6 +189,13 @@ describe('a printed shred list', () => {
     expect(wholeText(pages)).toContain('stands for a character that this page cannot print');
   });
 
+  test('claims nothing about a paper for which no date is known', async () => {
+    const rows = [makeRow(1, { keepUntil: null, rule: null, ruleBasis: null, paperOn: null })];
+    const text = wholeText(await readList({ rows }));
+    expect(text).toContain('No keep-until date');
+    expect(text).toContain('no date');
+  });
+
   test('is the same file for the same list', async () => {
     const input = { list: makeList(), pictures: new Map(), ...names, paper: 'A4' as const };
     expect(await printShredList(input)).toEqual(await printShredList(input));
@@ -250,7 +257,7 @@ describe('a printed destruction record', () => {
       'Cross-cut shredder of the practice',
       'Level P-4 of ISO/IEC 21964 and DIN 66399',
       'Ada Marlow; the client was present',
-      'Robin Teal for Quiet Drawer Organising',
+      'Recorded by Robin Teal',
       'Approved by Ada Marlow on 2 Dec 2026, version 3',
       'Keep until 31 Jan 2023',
       'gb.bank-statement.self-employed',
