@@ -1,0 +1,145 @@
+import { useEffect, useState } from 'react';
+import { Columns3, Search, X } from 'lucide-react';
+import { classGroupLabels, classGroups } from '../../../../server/contract/document-classes.ts';
+import { paperStatuses, pileLabels, piles } from '../../../../server/contract/papers.ts';
+import { Button } from '../../../components/ui/button.tsx';
+import { Field } from '../../../components/ui/field.tsx';
+import { Menu, MenuCheck } from '../../../components/ui/menu.tsx';
+import { Select } from '../../../components/ui/select.tsx';
+import { TextInput } from '../../../components/ui/text-input.tsx';
+import type { FilterName, Filters } from '../logic/filters.ts';
+import { filterNames } from '../logic/filters.ts';
+import type { ColumnVisibility } from '../logic/use-columns.ts';
+import { statusWords } from '../logic/words.ts';
+import { columns, fixedColumns } from './register-columns.tsx';
+
+/** Asked a moment after the last letter, not with each. */
+const typingPauseMs = 300;
+
+/** Search and filters of the register. */
+export function RegisterFilters({
+  filters,
+  boxes,
+  onChange,
+  onClear,
+}: {
+  filters: Filters;
+  boxes: { id: string; code: string; label: string }[];
+  onChange: (name: FilterName, value: string) => void;
+  onClear: () => void;
+}) {
+  const isFiltered = filterNames.some((name) => filters[name] !== '');
+  const choose = (name: FilterName, label: string, choices: [string, string][]) => (
+    <Field label={label} className="w-full sm:w-40">
+      {(props) => (
+        <Select
+          {...props}
+          value={filters[name]}
+          onChange={(event) => onChange(name, event.target.value)}
+        >
+          <option value="">All</option>
+          {choices.map(([value, words]) => (
+            <option key={value} value={value}>
+              {words}
+            </option>
+          ))}
+        </Select>
+      )}
+    </Field>
+  );
+  return (
+    <search className="mb-4 flex flex-wrap items-end gap-3">
+      <SearchBox value={filters.q} onSearch={(q) => onChange('q', q)} />
+      {choose(
+        'status',
+        'State',
+        paperStatuses.map((status) => [status, statusWords[status]]),
+      )}
+      {choose(
+        'group',
+        'Group',
+        classGroups.map((group) => [group, classGroupLabels[group]]),
+      )}
+      {choose(
+        'pile',
+        'Pile',
+        piles.map((pile) => [pile, pileLabels[pile]]),
+      )}
+      {boxes.length > 0
+        ? choose(
+            'box',
+            'Box',
+            boxes.map((box) => [box.id, `${box.code} ${box.label}`.trim()]),
+          )
+        : null}
+      {choose('held', 'Don’t destroy yet', [
+        ['true', 'set'],
+        ['false', 'not set'],
+      ])}
+      {isFiltered ? (
+        <Button icon={<X aria-hidden />} onClick={onClear}>
+          Show all
+        </Button>
+      ) : null}
+    </search>
+  );
+}
+
+function SearchBox({ value, onSearch }: { value: string; onSearch: (q: string) => void }) {
+  const [text, setText] = useState(value);
+  const [lastValue, setLastValue] = useState(value);
+  // The address changed by other means, for example the back button.
+  if (value !== lastValue) {
+    setLastValue(value);
+    setText(value);
+  }
+  useEffect(() => {
+    if (text === value) return;
+    const timer = setTimeout(() => onSearch(text), typingPauseMs);
+    return () => clearTimeout(timer);
+  }, [text, value, onSearch]);
+  return (
+    <Field label="Any word on the paper" className="w-full sm:w-72">
+      {(props) => (
+        <span className="relative">
+          <Search
+            aria-hidden
+            className="pointer-events-none absolute top-1/2 left-3 size-5 -translate-y-1/2 text-ink-faint"
+          />
+          <TextInput
+            {...props}
+            type="search"
+            className="w-full pl-10"
+            value={text}
+            onChange={(event) => setText(event.target.value)}
+          />
+        </span>
+      )}
+    </Field>
+  );
+}
+
+/** Which columns are in view. */
+export function ColumnMenu({
+  visibility,
+  onShow,
+}: {
+  visibility: ColumnVisibility;
+  onShow: (id: string, isShown: boolean) => void;
+}) {
+  return (
+    <Menu trigger={<Button icon={<Columns3 aria-hidden />}>Columns</Button>}>
+      {columns
+        .filter((column) => !fixedColumns.has(column.id ?? ''))
+        .map((column) => (
+          <MenuCheck
+            key={column.id}
+            checked={visibility[column.id ?? ''] !== false}
+            onCheckedChange={(isShown) => onShow(column.id ?? '', isShown)}
+          >
+            {String(column.header)}
+          </MenuCheck>
+        ))}
+    </Menu>
+  );
+}

@@ -1,0 +1,22 @@
+import type { PaperRow, PaperStatus } from '../../../../server/contract/papers.ts';
+import { formatDay } from '../../../lib/format.ts';
+
+export const statusWords: Record<PaperStatus, string> = {
+  'to-review': 'to look at',
+  undecided: 'undecided',
+  kept: 'kept',
+  leaving: 'leaving',
+  left: 'left',
+};
+
+export const keptWords = { duty: 'a duty', use: 'use', dear: 'it is dear' } as const;
+
+/** Until when a paper stays, in words. */
+export function describeStay(row: PaperRow): string {
+  if (row.leftOn) return `left on ${formatDay(row.leftOn)}`;
+  if (row.permanent) return 'for good';
+  if (row.held) return "don't destroy yet";
+  if (row.open) return 'no date yet';
+  if (row.keepUntil) return formatDay(row.keepUntil);
+  return row.shredFrom ? `may go from ${formatDay(row.shredFrom)}` : 'no date yet';
+}
