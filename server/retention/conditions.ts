@@ -41,6 +41,10 @@ function meetsCondition(value: unknown, condition: ConditionValue): Answer {
       return value === null ? 'yes' : 'no';
     case 'not-never':
       return value === null ? 'no' : 'yes';
+    case 'not-unknown':
+      return value === undefined ? 'no' : 'yes';
+    case 'not-no':
+      return value === false || value === null ? 'no' : 'yes';
     case 'unknown':
       return value === undefined ? 'yes' : 'no';
   }
@@ -51,8 +55,8 @@ function meetsKind(
   known: ReadonlySet<string>,
   condition: NonNullable<Rule['documentKind']>,
 ): Answer {
-  // A kind that no rule of the class names tells nothing: it counts like one that is not known.
-  if (!kind || !known.has(kind)) return condition.orUnknown ? 'assumed' : 'no';
+  // A kind that no rule of the class names is at least none of the excepted ones; otherwise it tells nothing.
+  if (!kind || (condition.only && !known.has(kind))) return condition.orUnknown ? 'assumed' : 'no';
   const isMet = condition.only ? condition.only.includes(kind) : !condition.except?.includes(kind);
   return isMet ? 'yes' : 'no';
 }

@@ -9,6 +9,7 @@ import {
   addMonths,
   endOfMonth,
   endOfYearEnding,
+  findLatest,
   isEndOfMonth,
   laterOf,
   makeDay,
@@ -79,6 +80,7 @@ const derivedMoments = [
   'auIncomeYear',
   'calendarTaxYear',
   'claimYearEnd',
+  'irishTransactionYear',
   'nextPayPeriod',
   'employmentTaxDue',
 ] as const;
@@ -150,6 +152,7 @@ const labels: Record<Moment, string> = {
   auIncomeYear: 'the end of the income year',
   calendarTaxYear: 'the end of the tax year',
   claimYearEnd: 'the end of the year claimed for',
+  irishTransactionYear: 'the end of the tax year of the transaction',
   nextPayPeriod: 'the end of the pay reference period after it',
   employmentTaxDue: 'the day the tax was due',
 };
@@ -296,6 +299,13 @@ export function resolveMoment(
       const day = inputs.paidOn ?? findPaperDate(inputs);
       if (!day) return missing(moment);
       return found(moment, endOfYear(day), `${wordDay(day)} falls in the year ${day.slice(0, 4)}.`);
+    }
+    case 'irishTransactionYear': {
+      // The last year that uses the record counts: the tax year given, or the transaction's own.
+      const given = inputs.taxYear ? makeDay(inputs.taxYear, 12, 31) : null;
+      const completed = findLatest([inputs.transactionDate, inputs.transactionCompletedOn]);
+      const year = completed && given ? laterOf(given, endOfYear(completed)) : given;
+      return resolveYear(moment, inputs, year, endOfYear, waitsFor);
     }
     case 'nextPayPeriod':
       return resolveNextPayPeriod(inputs);

@@ -66,6 +66,8 @@ export const conditionValues = [
   'never',
   'unknown',
   'not-never',
+  'not-unknown',
+  'not-no',
 ] as const;
 export type ConditionValue = (typeof conditionValues)[number];
 
@@ -107,6 +109,8 @@ const triggerShape = {
   pick: z.enum(['first', 'latest']).default('first'),
   /** With `pick: latest`: moments that must be known, or the rule stays open. */
   needs: z.array(momentSchema).optional(),
+  /** With `pick: latest`: one of these must be known, or the rule stays open. */
+  needsOneOf: z.array(momentSchema).optional(),
   /** An event that must have happened before anything is counted. */
   waitsFor: dayInputSchema.optional(),
   /** An event that is said not to have happened (`null`) keeps the rule open; silence does not. */

@@ -10,6 +10,7 @@ export interface TriggerPlan {
   readonly trigger: readonly Moment[];
   readonly pick: 'first' | 'latest';
   readonly needs?: readonly Moment[] | undefined;
+  readonly needsOneOf?: readonly Moment[] | undefined;
   readonly waitsFor?: DayInput | undefined;
   readonly openWhile?: DayInput | undefined;
 }
@@ -85,6 +86,12 @@ function findLatestOf(
   }
   if (!latest?.day) {
     return openBecause(explainMissing(never ?? plan.trigger[0] ?? 'paperDate', never !== null));
+  }
+  const anyOf = plan.needsOneOf;
+  if (anyOf && !anyOf.some((moment) => resolveMoment(moment, scene.inputs).day !== null)) {
+    const named = anyOf[0] ?? 'paperDate';
+    if (resolveMoment(named, scene.inputs).isNever) return openBecause(explainMissing(named, true));
+    lacking = named;
   }
   noteTrigger(scene, latest, latest.day);
   return { day: latest.day, label: latest.label, lacking };
