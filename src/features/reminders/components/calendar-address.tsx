@@ -1,0 +1,52 @@
+import { CalendarDays, Copy } from 'lucide-react';
+import { toast } from 'sonner';
+import { Banner } from '../../../components/ui/banner.tsx';
+import { Button } from '../../../components/ui/button.tsx';
+import { Field } from '../../../components/ui/field.tsx';
+import { TextInput } from '../../../components/ui/text-input.tsx';
+import { sentenceOf } from '../../../lib/api-error.ts';
+import { useMakeCalendarAddress } from '../api/make-calendar-address.ts';
+
+/** The secret address under which a calendar program finds the dates. Shown once, when it is made. */
+export function CalendarAddress({ householdId }: { householdId: string }) {
+  const make = useMakeCalendarAddress(householdId);
+  const url = make.data?.url;
+  return (
+    <div className="space-y-4">
+      {make.error ? (
+        <Banner alert tone="danger" title="No address was made">
+          {sentenceOf(make.error)}
+        </Banner>
+      ) : null}
+      {url ? (
+        <div className="flex flex-wrap items-end gap-3">
+          <Field
+            label="Address for your calendar"
+            hint="Whoever has it sees the dates. It is shown this once."
+            className="min-w-0 flex-1 basis-80"
+          >
+            {(props) => (
+              <TextInput {...props} readOnly value={url} onFocus={(e) => e.target.select()} />
+            )}
+          </Field>
+          <Button
+            icon={<Copy aria-hidden />}
+            onClick={() => {
+              void navigator.clipboard.writeText(url).then(() => toast.success('Copied.'));
+            }}
+          >
+            Copy
+          </Button>
+        </div>
+      ) : null}
+      <Button
+        icon={<CalendarDays aria-hidden />}
+        busy={make.isPending}
+        onClick={() => make.mutate()}
+      >
+        {url ? 'Make another address' : 'Make a calendar address'}
+      </Button>
+      <p className="text-sm text-ink-soft">A new address makes an earlier one stop working.</p>
+    </div>
+  );
+}
