@@ -7,8 +7,7 @@ import { buildApiUrl, callApi } from '../../../lib/api-client.ts';
 export function paperQuery(paperId: string) {
   return queryOptions({
     queryKey: ['papers', paperId],
-    queryFn: ({ signal }) =>
-      callApi(paperEndpoints.getPaper, { params: { id: paperId }, signal }),
+    queryFn: ({ signal }) => callApi(paperEndpoints.getPaper, { params: { id: paperId }, signal }),
   });
 }
 

@@ -1,5 +1,7 @@
 /** What goes and what stays when single rows are kept back, and when agreed papers may be shredded. */
+import type { z } from 'zod';
 import {
+  approveShredListSchema,
   sheetGrams,
   type ShredList,
   type ShredRow,
@@ -41,3 +43,7 @@ export function decideReadiness(
   }
   return { kind: 'ready' };
 }
+
+/** What is asked when consent is given; the instruction only when the practice records it. */
+export const consentFormSchema = approveShredListSchema.pick({ waitDays: true, instruction: true });
+export type ConsentForm = z.input<typeof consentFormSchema>;
