@@ -8,7 +8,7 @@ import { findAdvice } from './advice.ts';
 import { combineOutcomes } from './combine.ts';
 import type { Verdict } from './combine.ts';
 import type { CountedRoles } from './conditions.ts';
-import { appliesTo, collectKinds } from './conditions.ts';
+import { appliesTo, collectKinds, collectRoles } from './conditions.ts';
 import type { KnownKinds } from './conditions.ts';
 import { nextDay, wordDay } from './dates.ts';
 import { evaluateRule } from './evaluate-rule.ts';
@@ -31,16 +31,22 @@ export interface Say {
   readonly advice: Advice | null;
 }
 
-const kindsOf = new WeakMap<readonly Rule[], KnownKinds>();
+/** What the rules of a class tell apart. */
+interface ClassProfile {
+  readonly kinds: KnownKinds;
+  readonly roles: ReadonlySet<CaseRole> | null;
+}
+
+const profiles = new WeakMap<readonly Rule[], ClassProfile>();
 const noRules: readonly Rule[] = [];
 
-function knownKinds(rules: readonly Rule[], more: readonly Rule[]): KnownKinds {
-  let kinds = kindsOf.get(rules);
-  if (!kinds) {
-    kinds = collectKinds([...rules, ...more]);
-    if (rules !== noRules) kindsOf.set(rules, kinds);
+function profileOf(own: readonly Rule[], common: readonly Rule[]): ClassProfile {
+  let profile = profiles.get(own);
+  if (!profile) {
+    profile = { kinds: collectKinds([...own, ...common]), roles: collectRoles(own) };
+    if (own !== noRules) profiles.set(own, profile);
   }
-  return kinds;
+  return profile;
 }
 
 /** Everything gathered while the rules are asked. */
@@ -61,7 +67,10 @@ function askRules(
   let hasSaid = false;
   for (const rule of candidates) {
     const assumed: string[] = [];
-    if (!appliesTo(rule, scene.inputs, scene.region, counted, kinds, assumed)) continue;
+    if (!appliesTo(rule, scene.inputs, scene.region, counted, kinds, assumed)) {
+      if (assumed.length > 0) gathering.assumed.push(...assumed);
+      continue;
+    }
     const mark = gathering.steps.length;
     const outcome = evaluateRule(rule, scene);
     if (outcome.kind === 'not-in-force') {
@@ -85,7 +94,7 @@ function askRules(
   return hasSaid;
 }
 
-const roleNotKnown: CountedRoles = { roles: allRoles, isStated: false };
+const roleNotKnown: CountedRoles = { roles: allRoles, isStated: false, isAny: true };
 
 function countRoles(inputs: CaseInputs, options: AssessOptions): CountedRoles {
   const { role } = inputs;
@@ -104,7 +113,7 @@ function askTable(
 ): void {
   const own = country.byClass.get(retentionCase.class) ?? noRules;
   const common = ruleSet.common.byClass.get(retentionCase.class) ?? noRules;
-  const kinds = knownKinds(own, common);
+  const { kinds, roles } = profileOf(own, common);
   const region = normaliseRegion(inputs.region);
   const scene: Scene = {
     inputs,
@@ -114,31 +123,20 @@ function askTable(
     steps: gathering.steps,
     assumed: gathering.assumed,
   };
-  const counted = countRoles(inputs, options);
-  if (own.length > 0) {
-    const before = gathering.assumed.length;
-    if (askRules(own, kinds, counted, retentionCase, scene, gathering)) {
-      const dependsOnRole = !counted.isStated && own.some((rule) => rule.roles);
-      if (dependsOnRole) {
-        gathering.assumed.splice(
-          before,
-          0,
-          'Whose paper it is, in which role, is not known: every possible role was counted.',
-        );
-      }
-      return;
-    }
-    if (
-      counted !== roleNotKnown &&
-      askRules(own, kinds, roleNotKnown, retentionCase, scene, gathering)
-    ) {
-      const because = counted.isStated
+  let counted = countRoles(inputs, options);
+  if (roles && counted !== roleNotKnown && !counted.roles.some((role) => roles.has(role))) {
+    gathering.assumed.push(
+      counted.isStated
         ? `No rule of its own for the role "${inputs.role ?? ''}": every role was counted.`
-        : 'No rule for the roles that the circumstances allow: every role was counted.';
-      gathering.assumed.splice(before, 0, because);
-      return;
-    }
+        : 'No rule for the roles that the circumstances allow: every role was counted.',
+    );
+    counted = roleNotKnown;
+  } else if (roles && !counted.isStated) {
+    gathering.assumed.push(
+      'Whose paper it is, in which role, is not known: every possible role was counted.',
+    );
   }
+  if (askRules(own, kinds, counted, retentionCase, scene, gathering)) return;
   askRules(common, kinds, counted, retentionCase, scene, gathering);
 }
 

@@ -50,6 +50,12 @@ function meetsCondition(value: unknown, condition: ConditionValue): Answer {
   }
 }
 
+/** Said when a rule was left out because its answer is not known and the common case is that it does not hold. */
+const unlikelyNotes: Partial<Record<InputName, string>> = {
+  usedForTax: 'Whether it was used for a tax return is not known: counted as private.',
+  oneStopShop: 'Whether the sale went through the one-stop shop is not known: counted as not.',
+};
+
 function meetsKind(
   kind: string | null | undefined,
   known: ReadonlySet<string>,
@@ -90,6 +96,8 @@ function meetsRegion(rule: Rule, region: string | null): Answer {
 export interface CountedRoles {
   readonly roles: readonly CaseRole[];
   readonly isStated: boolean;
+  /** Nothing narrows the roles down: then even a rare use of a paper cannot be ruled out. */
+  readonly isAny?: boolean;
 }
 
 function meetsRole(rule: Rule, counted: CountedRoles, inputs: CaseInputs): boolean {
@@ -100,6 +108,12 @@ function meetsRole(rule: Rule, counted: CountedRoles, inputs: CaseInputs): boole
   }
   for (const role of counted.roles) if (rule.roles.includes(role)) return true;
   return false;
+}
+
+/** The roles that the rules of a class speak of; null when they are the same for every role. */
+export function collectRoles(rules: readonly Rule[]): ReadonlySet<CaseRole> | null {
+  const spoken = rules.flatMap((rule) => rule.roles ?? []);
+  return spoken.length === 0 ? null : new Set(spoken);
 }
 
 /** Whether the rule applies; sentences about unknown answers are added to `assumed`. */
@@ -130,8 +144,16 @@ export function appliesTo(
       const key = name as InputName;
       const condition = rule.when[key];
       if (!condition) continue;
-      const answer = meetsCondition(inputs[key], condition);
-      if (answer === 'no') return false;
+      let answer = meetsCondition(inputs[key], condition);
+      if (answer === 'no' && condition === 'yes' && key === 'usedForTax' && counted.isAny) {
+        if (inputs.usedForTax === undefined) answer = 'assumed';
+      }
+      if (answer === 'no') {
+        const note =
+          condition === 'yes' && inputs[key] === undefined ? unlikelyNotes[key] : undefined;
+        if (note) assumed.push(note);
+        return false;
+      }
       if (answer === 'assumed') (unknown ??= []).push(key);
     }
     if (unknown) for (const name of unknown) assumed.push(assumptionFor(name));
