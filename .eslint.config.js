@@ -33,6 +33,8 @@ export default tseslint.config(
       // Express, event emitters and JSX handlers take async functions and ignore what they return.
       '@typescript-eslint/no-misused-promises': ['error', { checksVoidReturn: false }],
       '@typescript-eslint/restrict-template-expressions': ['error', { allowNumber: true }],
+      // Express and vitest are extended by declaring into their namespaces.
+      '@typescript-eslint/no-namespace': ['error', { allowDeclarations: true }],
       eqeqeq: ['error', 'always', { null: 'ignore' }],
       'no-console': 'error',
     },

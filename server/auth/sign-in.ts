@@ -105,7 +105,6 @@ export type AppPassport = ReturnType<typeof createPassport>;
 
 declare global {
   // The name is given by passport's types.
-  // eslint-disable-next-line @typescript-eslint/no-namespace
   namespace Express {
     interface User extends Caller {
       readonly signedIn?: true;

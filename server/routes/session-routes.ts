@@ -1,4 +1,4 @@
-import { Router, type Request, type Response } from 'express';
+import { Router, type Request, type RequestHandler, type Response } from 'express';
 import { ipKeyGenerator, rateLimit } from 'express-rate-limit';
 import type { AppPassport } from '../auth/sign-in.ts';
 import { csrfTokenOf, newCsrfToken } from '../auth/csrf.ts';
@@ -82,8 +82,9 @@ function authenticate(
   return new Promise((resolve, reject) => {
     const done = (error: unknown, caller?: Caller | false | null) =>
       error ? reject(asError(error)) : resolve(caller || null);
-    // eslint-disable-next-line @typescript-eslint/no-unsafe-call -- passport types its middleware as any
-    passport.authenticate('local', done)(request, response, (error: unknown) =>
+    // Passport types its middleware as any.
+    const check = passport.authenticate('local', done) as RequestHandler;
+    void check(request, response, (error: unknown) =>
       reject(error ? asError(error) : new InvalidInputError([])),
     );
   });

@@ -102,8 +102,7 @@ async function receive(stream: NodeJS.ReadableStream, folder: string, maxBytes: 
 }
 
 /** Directions, controls and zero-width letters that could make a name read as something else. */
-// eslint-disable-next-line no-control-regex -- control characters are what is looked for
-const deceptive = /[\u0000-\u001f\u007f-\u009f\u200b-\u200f\u2028-\u202e\u2060-\u2069\ufeff]/g;
+const deceptive = /[\p{Cc}\u200b-\u200f\u2028-\u202e\u2060-\u2069\ufeff]/gu;
 const longestLabel = 120;
 
 /** A file name as a label: the last part of a path, without controls, at most 120 characters. */

@@ -77,15 +77,30 @@ export function describeDemoHouseholds(passportExpiresOn: string): DemoHousehold
             },
             {
               file: 'scan-047.pdf',
-              decision: { pile: 'file-here', keptBecause: 'use', place: 'Blue folder' },
+              decision: {
+                pile: 'file-here',
+                keptBecause: 'use',
+                place: 'Blue folder',
+                answers: { usedForTax: false },
+              },
             },
             {
               file: 'scan-018.pdf',
-              decision: { pile: 'file-here', keptBecause: 'use', place: 'Blue folder' },
+              decision: {
+                pile: 'file-here',
+                keptBecause: 'use',
+                place: 'Blue folder',
+                answers: { usedForTax: false },
+              },
             },
             {
               file: 'scan-058.pdf',
-              decision: { pile: 'file-here', keptBecause: 'duty', place: 'Blue folder' },
+              decision: {
+                pile: 'file-here',
+                keptBecause: 'duty',
+                place: 'Blue folder',
+                answers: { usedForTax: false },
+              },
             },
             { file: 'scan-011.jpg', decision: { pile: 'recycle' } },
             { file: 'scan-080.jpg', decision: { pile: 'shred' } },

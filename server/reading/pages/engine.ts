@@ -19,6 +19,14 @@ export interface SeenWord {
   confidence: number;
   /** Words of one line, as the engine saw it, share this. */
   line: string;
+  symbols: SeenSymbol[];
+}
+
+/** A letter and where it stands across the picture. */
+export interface SeenSymbol {
+  text: string;
+  left: number;
+  right: number;
 }
 
 export interface Engine {
@@ -59,28 +67,60 @@ export async function startEngine(model: LanguageModel): Promise<Engine> {
       api.SetVariable('tessedit_pageseg_mode', layoutModes[layout]);
       api.SetSourceResolution(dpi);
       api.Recognize(null);
-      return parseWords(api.GetTSVText(0));
+      return parseWords(api.GetJSONText());
     },
   };
 }
 
-/** Words of the engine's tab-separated answer (columns: level, page, block, par, line, word, box, confidence, text). */
-function parseWords(tsv: string): SeenWord[] {
+interface EngineBox {
+  x0: number;
+  y0: number;
+  x1: number;
+  y1: number;
+}
+interface EngineWord {
+  text: string;
+  confidence: number;
+  bbox: EngineBox;
+  symbols: { text: string; bbox: EngineBox }[];
+}
+interface EnginePage {
+  blocks?: { paragraphs?: { lines: { words: EngineWord[] }[] }[] }[] | null;
+}
+
+/** Words of the engine's JSON answer. */
+function parseWords(json: string): SeenWord[] {
   const words: SeenWord[] = [];
-  for (const row of tsv.split('\n')) {
-    const cells = row.split('\t');
-    if (cells[0] !== '5') continue;
-    const text = (cells[11] ?? '').trim();
-    if (text === '') continue;
-    words.push({
-      text,
-      left: Number(cells[6]),
-      top: Number(cells[7]),
-      width: Number(cells[8]),
-      height: Number(cells[9]),
-      confidence: Math.max(0, Math.min(1, Number(cells[10]) / 100)),
-      line: `${cells[2]}.${cells[3]}.${cells[4]}`,
-    });
+  const page = JSON.parse(json) as EnginePage;
+  let lineCount = 0;
+  for (const block of page.blocks ?? []) {
+    for (const paragraph of block.paragraphs ?? []) {
+      for (const line of paragraph.lines) {
+        const name = String(++lineCount);
+        for (const word of line.words) {
+          const text = word.text.trim();
+          if (text !== '') words.push(describeWord(word, text, name));
+        }
+      }
+    }
   }
   return words;
+}
+
+function describeWord(word: EngineWord, text: string, line: string): SeenWord {
+  const { x0, y0, x1, y1 } = word.bbox;
+  return {
+    text,
+    left: x0,
+    top: y0,
+    width: x1 - x0,
+    height: y1 - y0,
+    confidence: Math.max(0, Math.min(1, word.confidence / 100)),
+    line,
+    symbols: word.symbols.map(({ text: letter, bbox }) => ({
+      text: letter,
+      left: bbox.x0,
+      right: bbox.x1,
+    })),
+  };
 }

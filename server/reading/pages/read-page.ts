@@ -14,6 +14,7 @@ import {
 } from './prepare.ts';
 import { findCode } from './qr.ts';
 import { toGrey } from './raster.ts';
+import { mendSpacing } from './spacing.ts';
 import { assembleLines, joinLines, meanConfidence } from './text-lines.ts';
 import { identityMap } from './warp.ts';
 
@@ -90,7 +91,10 @@ function weigh(words: Word[]): number {
 function recognise(page: PreparedPage, engine: Engine): Word[] {
   const image = makeReadingImage(page);
   const seen = engine.recognise(image.grey, chooseLayout(page), 160);
-  return seen.filter(isPrint).map((word) => placeWord(word, image, page));
+  const height = (page.shape.letterHeight ?? 16 / image.scale) * image.scale;
+  return mendSpacing(seen, height)
+    .filter(isPrint)
+    .map((word) => placeWord(word, image, page));
 }
 
 /** Till receipts are narrow single columns, for which one even block reads best. */

@@ -6,7 +6,7 @@ interface TesseractCoreApi {
   SetImageFile(exif: number, angle: number): number;
   SetSourceResolution(dpi: number): void;
   Recognize(monitor: null): number;
-  GetTSVText(page?: number): string;
+  GetJSONText(): string;
   Clear(): void;
   End(): void;
 }

@@ -56,6 +56,8 @@ export function PageViewer({
   const scrolls =
     size !== null &&
     (placed.room.width + 2 * margin > size.width || placed.room.height + 2 * margin > size.height);
+  // What scrolls must be within reach of the keyboard.
+  const reach = scrolls ? { tabIndex: 0 } : {};
   const onPage = marks.filter((mark) => mark.page === page.number);
 
   return (
@@ -72,7 +74,7 @@ export function PageViewer({
         ref={frame}
         role="group"
         aria-label={`Page ${page.number} of ${pages.length}`}
-        tabIndex={scrolls ? 0 : -1}
+        {...reach}
         onPointerDown={scrolls ? startPanning : undefined}
         className={joinClasses(
           'relative min-h-0 flex-1 overflow-auto rounded bg-paper-sunk',

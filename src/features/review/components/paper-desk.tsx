@@ -175,6 +175,7 @@ export function PaperDesk({
       onActiveMark={setActiveMark}
       onShowPage={(page) => act({ do: 'show-page', pageIndex: page - 1 })}
       onChooseKind={(kind) => amend({ class: kind })}
+      onAmend={amend}
       onCommand={run}
     />
   );

@@ -1,7 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router-dom';
 import { classLabel, type ClassId } from '../../../../server/contract/document-classes.ts';
-import type { Paper } from '../../../../server/contract/papers.ts';
+import type { Paper, UpdatePaper } from '../../../../server/contract/papers.ts';
 import { PageHeading } from '../../../components/layout/page-heading.tsx';
 import { Banner } from '../../../components/ui/banner.tsx';
 import { formatCount } from '../../../lib/format.ts';
@@ -11,6 +11,7 @@ import type { ReviewCommand } from '../logic/key-map.ts';
 import { FactsSection } from './facts-section.tsx';
 import { KeepingSection } from './keeping-section.tsx';
 import { KindSection } from './kind-section.tsx';
+import { QuestionsSection } from './questions-section.tsx';
 import { ReasoningSection } from './reasoning-section.tsx';
 import { VerdictSection } from './verdict-section.tsx';
 
@@ -25,6 +26,7 @@ interface PaperPanelProps {
   onActiveMark: (key: string | null) => void;
   onShowPage: (pageNumber: number) => void;
   onChooseKind: (kind: ClassId) => void;
+  onAmend: (patch: UpdatePaper) => void;
   onCommand: (command: ReviewCommand) => void;
 }
 
@@ -40,6 +42,7 @@ export function PaperPanel({
   onActiveMark,
   onShowPage,
   onChooseKind,
+  onAmend,
   onCommand,
 }: PaperPanelProps) {
   const { data: household } = useQuery(householdQuery(householdId));
@@ -86,6 +89,7 @@ export function PaperPanel({
         isWorking={isWorking}
         onStepDown={canStepDown ? () => onCommand({ does: 'step-down' }) : null}
       />
+      {mayReview ? <QuestionsSection paper={paper} onAmend={onAmend} /> : null}
       <FactsSection
         paper={paper}
         mayReview={mayReview}

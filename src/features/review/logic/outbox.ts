@@ -178,12 +178,12 @@ export function createOutbox(deps: OutboxDeps) {
   }
 
   return {
-    subscribe(listener: () => void): () => void {
+    subscribe: (listener: () => void): (() => void) => {
       listeners.add(listener);
       return () => listeners.delete(listener);
     },
     /** Calls back with what became of each entry; returns how to stop listening. */
-    hear(hearer: (event: OutboxEvent) => void): () => void {
+    hear: (hearer: (event: OutboxEvent) => void): (() => void) => {
       hearers.add(hearer);
       return () => hearers.delete(hearer);
     },

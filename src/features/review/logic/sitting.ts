@@ -41,39 +41,39 @@ export function createSitting(deps: OutboxDeps) {
   }
   return {
     outbox,
-    subscribe(listener: () => void): () => void {
+    subscribe: (listener: () => void): (() => void) => {
       listeners.add(listener);
       return () => listeners.delete(listener);
     },
     getSnapshot: (): SittingMemory => memory,
     /** A step that an entry on its way took up is one step with it. */
-    addStep(step: Step) {
+    addStep: (step: Step): void => {
       const others = memory.steps.filter(
         ({ entryId }) => entryId === null || entryId !== step.entryId,
       );
       change({ steps: [...others, step] });
     },
     /** Takes the latest step off; null when there is none. */
-    takeStep(): Step | null {
+    takeStep: (): Step | null => {
       const step = memory.steps.at(-1);
       if (!step) return null;
       change({ steps: memory.steps.slice(0, -1) });
       return step;
     },
-    notePageShown(pageId: string) {
+    notePageShown: (pageId: string): void => {
       if (memory.shownPageIds.has(pageId)) return;
       change({ shownPageIds: new Set([...memory.shownPageIds, pageId]) });
     },
-    pass(paperId: string) {
+    pass: (paperId: string): void => {
       change({ passedIds: new Set([...memory.passedIds, paperId]) });
     },
-    unpass(paperId: string) {
+    unpass: (paperId: string): void => {
       change({ passedIds: new Set([...memory.passedIds].filter((id) => id !== paperId)) });
     },
-    forgetPassed() {
+    forgetPassed: (): void => {
       change({ passedIds: new Set() });
     },
-    notePlace(place: string) {
+    notePlace: (place: string): void => {
       const others = memory.places.filter((known) => known !== place);
       change({ places: [place, ...others].slice(0, mostPlaces) });
     },

@@ -1,7 +1,6 @@
 import { FileText } from 'lucide-react';
 import type { ShredList } from '../../../../server/contract/shred-lists.ts';
 import { FileLink } from '../../../components/ui/button.tsx';
-import { GuidanceNote } from '../../../components/ui/guidance-note.tsx';
 import { formatDay } from '../../../lib/format.ts';
 import { recordPdfUrl, shredListPdfUrl } from '../api/get-shred-list.ts';
 import { AgreedFacts, ShreddedFacts } from './list-facts.tsx';
@@ -50,7 +49,6 @@ export function ListSide({ list }: { list: ShredList }) {
           ? ` The finest shredder level any paper asks for is ${list.securityLevel}.`
           : ''}
       </p>
-      <GuidanceNote />
     </aside>
   );
 }

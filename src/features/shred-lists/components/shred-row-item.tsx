@@ -20,7 +20,7 @@ export function ShredRowItem({ row, isLookedAt, stays, onOpen, control }: ShredR
   return (
     <li
       className={joinClasses(
-        'flex gap-4 border-b border-line p-3 [contain-intrinsic-size:auto_9rem] [content-visibility:auto] last:border-b-0 sm:p-4',
+        'flex gap-4 border-b border-line p-3 last:border-b-0 sm:p-4',
         stays && 'bg-teal-wash/50',
       )}
     >

@@ -72,6 +72,7 @@ export function describePlace(
 export function describeTerm(
   row: Pick<ShredRow, 'keepUntil' | 'rule' | 'ruleBasis' | 'sourceNote'>,
 ): string {
-  if (!row.keepUntil) return describeRule(row);
+  if (!row.rule) return describeRule(row);
+  if (!row.keepUntil) return `No set time to keep it · ${describeRule(row)}`;
   return `To be kept until ${formatShortDay(row.keepUntil)} · ${describeRule(row)}`;
 }
