@@ -4,50 +4,51 @@ import { useNavigate } from 'react-router-dom';
 import { PageFrame } from '../../components/layout/page-frame.tsx';
 import { PageHeading } from '../../components/layout/page-heading.tsx';
 import { Button } from '../../components/ui/button.tsx';
-import { Dialog } from '../../components/ui/dialog.tsx';
 import { QueryView } from '../../components/ui/query-view.tsx';
 import { EmptyState } from '../../components/ui/states.tsx';
 import { useBoxes } from '../../features/boxes/api/list-boxes.ts';
 import { BoxList } from '../../features/boxes/components/box-list.tsx';
-import { NewBoxForm } from '../../features/boxes/components/new-box-form.tsx';
+import { NewBoxDialog } from '../../features/boxes/components/new-box-dialog.tsx';
 import { paths } from '../../lib/paths.ts';
 import { useMay } from '../../lib/use-may.ts';
 import { useRouteId } from '../use-route-id.ts';
 
-/** Where papers come from. */
+/** The boxes of a household: where papers come in. */
 export function Component() {
   const householdId = useRouteId('householdId');
-  const navigate = useNavigate();
   const boxes = useBoxes(householdId);
-  const mayWrite = useMay('box:write', householdId);
-  const [isAdding, setAdding] = useState(false);
-  const addButton = mayWrite ? (
-    <Button tone="primary" icon={<Plus aria-hidden />} onClick={() => setAdding(true)}>
-      Open a box
+  const mayAdd = useMay('box:write', householdId);
+  const [isAdding, setIsAdding] = useState(false);
+  const navigate = useNavigate();
+  const add = mayAdd ? (
+    <Button tone="primary" icon={<Plus aria-hidden />} onClick={() => setIsAdding(true)}>
+      Add a box
     </Button>
   ) : null;
   return (
     <PageFrame>
-      <PageHeading title="Bring in" actions={addButton}>
-        A box is where papers come from: a drawer, a shelf, a carton.
+      <PageHeading title="Boxes" actions={boxes.data?.items.length ? add : null}>
+        Open a box to scan its papers into it, or to print its label.
       </PageHeading>
       <QueryView query={boxes} what="the boxes">
         {({ items }) =>
-          items.length === 0 ? (
-            <EmptyState icon={<PackageOpen />} title="No box yet" action={addButton}>
-              Open the first one, print its label, then put its papers under the scanner or camera.
-            </EmptyState>
-          ) : (
+          items.length > 0 ? (
             <BoxList boxes={items} />
+          ) : (
+            <EmptyState icon={<PackageOpen />} title="No box yet" action={add}>
+              A box is whatever holds a pile. Each gets a code, so that every sheet can be found
+              again.
+            </EmptyState>
           )
         }
       </QueryView>
-      <Dialog open={isAdding} onOpenChange={setAdding} title="Open a box">
-        <NewBoxForm
+      {isAdding ? (
+        <NewBoxDialog
           householdId={householdId}
+          onClose={() => setIsAdding(false)}
           onCreated={(box) => void navigate(paths.box(box.id))}
         />
-      </Dialog>
+      ) : null}
     </PageFrame>
   );
 }
