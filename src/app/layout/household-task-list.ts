@@ -15,6 +15,8 @@ export interface HouseholdTask {
   countWaiting?: (counts: Household['counts']) => number;
   /** What the number counts, for those who listen. */
   waitingWords?: string;
+  /** Where screens of this task have an address of their own. */
+  alsoAt?: string;
   /** Lit up only at exactly this address. */
   exact?: boolean;
 }
@@ -34,6 +36,7 @@ export const householdTasks: readonly HouseholdTask[] = [
     shortLabel: 'Bring in',
     icon: PackageOpen,
     to: paths.boxes,
+    alsoAt: '/boxes/',
     permission: 'box:read',
     countWaiting: (counts) => counts.reading,
     waitingWords: 'being read',
@@ -59,6 +62,7 @@ export const householdTasks: readonly HouseholdTask[] = [
     shortLabel: 'Let go',
     icon: Wind,
     to: paths.shredLists,
+    alsoAt: '/shred-lists/',
     permission: 'shred-list:read',
     countWaiting: (counts) => counts.leaving,
     waitingWords: 'leaving',

@@ -1,6 +1,6 @@
 import { ChevronDown, Ellipsis } from 'lucide-react';
 import { useQuery } from '@tanstack/react-query';
-import { Link, NavLink, useMatch } from 'react-router-dom';
+import { Link, NavLink, useLocation, useMatch } from 'react-router-dom';
 import type { Household } from '../../../server/contract/households.ts';
 import type { Permission } from '../../../server/contract/permissions.ts';
 import { Menu, MenuItem } from '../../components/ui/menu.tsx';
@@ -18,6 +18,7 @@ interface HouseholdTasksProps {
 /** Which of the tasks this person has, and how much waits in each. */
 function useTasks(householdId: string | null) {
   const session = useSession();
+  const { pathname } = useLocation();
   const { data: household } = useQuery({
     ...householdQuery(householdId ?? ''),
     enabled: householdId !== null,
@@ -25,6 +26,7 @@ function useTasks(householdId: string | null) {
   const may = (permission: Permission): boolean =>
     decideMay(session?.memberships ?? [], permission, householdId);
   return {
+    isAt: (task: HouseholdTask) => task.alsoAt !== undefined && pathname.startsWith(task.alsoAt),
     tasks: householdTasks.filter((task) => may(task.permission)),
     background: householdBackground.filter((place) => may(place.permission)),
     counts: household?.counts,
@@ -44,7 +46,7 @@ function WaitingCount({ task, counts }: { task: HouseholdTask; counts?: Househol
 
 /** The tasks in a row under the header, on screens with room for it. */
 export function HouseholdTaskRow({ householdId }: HouseholdTasksProps) {
-  const { tasks, background, counts } = useTasks(householdId);
+  const { tasks, background, counts, isAt } = useTasks(householdId);
   const inBackground = useMatch('/households/:householdId/:place');
   const current = background.find(
     (place) => householdId && inBackground?.pathname === place.to(householdId),
@@ -69,7 +71,7 @@ export function HouseholdTaskRow({ householdId }: HouseholdTasksProps) {
               className={({ isActive }) =>
                 joinClasses(
                   'flex items-center gap-2 border-b-3 px-2.5 pt-0.5 font-semibold whitespace-nowrap no-underline lg:px-3.5',
-                  isActive
+                  isActive || isAt(task)
                     ? 'border-teal text-ink'
                     : 'border-transparent text-ink-soft hover:border-line hover:text-ink',
                 )
@@ -115,7 +117,7 @@ const mostByThumb = 5;
 
 /** The tasks by the thumb, at the bottom of a phone. */
 export function HouseholdBottomBar({ householdId }: HouseholdTasksProps) {
-  const { tasks, background, counts } = useTasks(householdId);
+  const { tasks, background, counts, isAt } = useTasks(householdId);
   const byThumb = tasks.slice(0, mostByThumb);
   const rest = [...tasks.slice(mostByThumb), ...background];
   const cell =
@@ -135,7 +137,9 @@ export function HouseholdBottomBar({ householdId }: HouseholdTasksProps) {
               className={({ isActive }) =>
                 joinClasses(
                   cell,
-                  isActive ? 'border-teal text-teal-strong' : 'border-transparent text-ink-soft',
+                  isActive || isAt(task)
+                    ? 'border-teal text-teal-strong'
+                    : 'border-transparent text-ink-soft',
                 )
               }
             >

@@ -1,4 +1,5 @@
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
+import { useQueryClient } from '@tanstack/react-query';
 import { FilePen, Printer } from 'lucide-react';
 import { Link } from 'react-router-dom';
 import { toast } from 'sonner';
@@ -35,11 +36,15 @@ export function Component() {
   const [isEntering, setIsEntering] = useState(false);
   const householdId = box.data?.householdId;
   useHouseholdInView(householdId);
+  const { reading, toReview } = box.data?.counts ?? {};
+  const queryClient = useQueryClient();
+  useEffect(() => {
+    // What the household's tasks count goes with what was read here.
+    if (householdId) void queryClient.invalidateQueries({ queryKey: ['households', householdId] });
+  }, [queryClient, householdId, reading, toReview]);
   const mayUpload = useMay('scan:upload', householdId);
   const mayEnter = useMay('paper:enter', householdId);
   const mayReview = useMay('paper:review', householdId);
-  const read = scans.data?.items.filter((scan) => scan.status === 'read') ?? [];
-  const papers = read.reduce((sum, scan) => sum + scan.papers, 0);
   return (
     <PageFrame>
       <PageHeading
@@ -80,18 +85,18 @@ export function Component() {
               onAgain={sending.sendAgain}
               onClear={sending.clear}
             />
-            {papers > 0 && mayReview ? (
+            {data.counts.toReview > 0 && mayReview ? (
               <Banner
                 tone="good"
                 className="mt-6"
-                title={`${formatCount(papers, 'paper')} read from this box`}
+                title={`${formatCount(data.counts.toReview, 'paper')} from this box to look at`}
                 action={
                   <LinkButton tone="primary" to={paths.review(data.householdId)}>
                     Look through
                   </LinkButton>
                 }
               >
-                Nothing is decided yet: a person looks at each.
+                They are read. A person decides what becomes of each.
               </Banner>
             ) : null}
             <Section title="Scans">

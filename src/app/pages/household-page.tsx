@@ -28,7 +28,7 @@ export function Component() {
         title={household.data?.name ?? 'Household'}
         {...(household.data ? { above: household.data.practiceName } : {})}
       />
-      <div className="grid gap-x-12 gap-y-10 lg:grid-cols-[minmax(0,2fr)_minmax(0,3fr)]">
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-x-12 gap-y-10 lg:grid-cols-[minmax(0,2fr)_minmax(0,3fr)]">
         <section aria-labelledby="way-forward">
           <h2 id="way-forward" className="mb-4 text-sm font-semibold text-ink-soft">
             The way forward

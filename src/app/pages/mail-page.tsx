@@ -43,7 +43,7 @@ export function Component() {
                     ) : message.state === 'queued' ? (
                       <Badge>on its way</Badge>
                     ) : (
-                      <Badge tone="danger">not sent yet</Badge>
+                      <Badge tone="soon">not sent yet</Badge>
                     )}
                     {message.lastError ? (
                       <p className="basis-full text-sm text-ink-soft">

@@ -17,7 +17,7 @@ import {
 } from '../../features/register/components/register-filters.tsx';
 import { RegisterTable } from '../../features/register/components/register-table.tsx';
 import {
-  type FilterName,
+  type Filters,
   pageSize,
   readView,
   toQuery,
@@ -49,10 +49,10 @@ export function Component() {
     [setSearch],
   );
   const setFilter = useCallback(
-    (name: FilterName, value: string) =>
+    (change: Partial<Filters>) =>
       go(
-        (before) => ({ ...before, page: 1, filters: { ...before.filters, [name]: value } }),
-        name === 'q',
+        (before) => ({ ...before, page: 1, filters: { ...before.filters, ...change } }),
+        'q' in change,
       ),
     [go],
   );

@@ -2,13 +2,13 @@ import type { ReactNode } from 'react';
 import { CircleAlert, CircleCheck, Clock, Hand, Info } from 'lucide-react';
 import { joinClasses } from '../../lib/join-classes.ts';
 
-export type BannerTone = 'info' | 'good' | 'soon' | 'danger' | 'hold';
+export type BannerTone = 'info' | 'good' | 'soon' | 'fault' | 'hold';
 
 const looks: Record<BannerTone, { style: string; icon: typeof Info }> = {
   info: { style: 'border-line-strong bg-paper-sunk text-ink', icon: Info },
   good: { style: 'border-teal bg-teal-wash text-teal-strong', icon: CircleCheck },
   soon: { style: 'border-amber bg-amber-wash text-amber-strong', icon: Clock },
-  danger: { style: 'border-rust bg-rust-wash text-rust-strong', icon: CircleAlert },
+  fault: { style: 'border-amber-strong bg-amber-wash text-amber-strong', icon: CircleAlert },
   hold: { style: 'border-violet bg-violet-wash text-violet-strong', icon: Hand },
 };
 
@@ -23,7 +23,7 @@ interface BannerProps {
   children?: ReactNode;
 }
 
-/** A message that stays where it is. Amber is for *soon*, violet for "don't destroy yet". */
+/** A message that stays where it is. Amber asks for attention, violet says "don't destroy yet". */
 export function Banner({
   tone = 'info',
   title,

@@ -54,7 +54,10 @@ export function Field({
         'aria-invalid': error ? true : undefined,
       })}
       {error ? (
-        <p id={errorId} className="flex items-start gap-1.5 text-sm font-semibold text-rust-strong">
+        <p
+          id={errorId}
+          className="flex items-start gap-1.5 text-sm font-semibold text-amber-strong"
+        >
           <CircleAlert aria-hidden className="mt-0.5 size-4 shrink-0" />
           {error}
         </p>

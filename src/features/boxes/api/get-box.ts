@@ -9,6 +9,13 @@ export function boxQuery(boxId: string) {
   });
 }
 
+const whileReadingMs = 2000;
+
+/** One box; its counts are asked for again while something in it is being read. */
 export function useBox(boxId: string) {
-  return useQuery(boxQuery(boxId));
+  return useQuery({
+    ...boxQuery(boxId),
+    refetchInterval: ({ state }) =>
+      (state.data?.counts.reading ?? 0) > 0 ? whileReadingMs : false,
+  });
 }

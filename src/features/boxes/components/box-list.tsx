@@ -35,7 +35,7 @@ function BoxState({ box: { counts } }: { box: BoxRecord }) {
     <>
       <span className="tabular-nums">{formatCount(counts.papers, 'paper')}</span>
       {counts.reading > 0 ? <Badge tone="soon">being read</Badge> : null}
-      {counts.failed > 0 ? <Badge tone="danger">{counts.failed} not readable</Badge> : null}
+      {counts.failed > 0 ? <Badge tone="soon">{counts.failed} not readable</Badge> : null}
       {counts.toReview > 0 ? <Badge tone="good">{counts.toReview} to look at</Badge> : null}
     </>
   );

@@ -48,7 +48,7 @@ export function NewBoxDialog({
     >
       <form noValidate onSubmit={(event) => void submit(event)} className="space-y-4">
         {create.error ? (
-          <Banner alert tone="danger" title="Not added">
+          <Banner alert tone="fault" title="Not added">
             {sentenceOf(create.error)}
           </Banner>
         ) : null}

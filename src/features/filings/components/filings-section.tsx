@@ -109,7 +109,7 @@ function FilingQuestion({
         {formatCount(question.papers, 'paper')} {question.papers === 1 ? 'waits' : 'wait'} for this.
       </p>
       {put.error ? (
-        <Banner alert tone="danger" className="mt-3" title="Not noted">
+        <Banner alert tone="fault" className="mt-3" title="Not noted">
           {sentenceOf(put.error)}
         </Banner>
       ) : null}

@@ -28,7 +28,7 @@ export function LiftHoldDialog({ hold, onClose }: { hold: Hold; onClose: () => v
     >
       <form noValidate onSubmit={(event) => void submit(event)} className="space-y-4">
         {lift.error ? (
-          <Banner alert tone="danger" title="Not lifted">
+          <Banner alert tone="fault" title="Not lifted">
             {sentenceOf(lift.error)}
           </Banner>
         ) : null}

@@ -34,7 +34,7 @@ export function PlaceHoldDialog({
     >
       <form noValidate onSubmit={(event) => void submit(event)} className="space-y-4">
         {place.error ? (
-          <Banner alert tone="danger" title="Not set">
+          <Banner alert tone="fault" title="Not set">
             {sentenceOf(place.error)}
           </Banner>
         ) : null}

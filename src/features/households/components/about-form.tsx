@@ -123,7 +123,7 @@ export function AboutForm({ household }: { household: Household }) {
           </div>
         </Section>
         {update.error && !isConflict(update.error) ? (
-          <Banner alert tone="danger" title="Not saved" className="mt-6">
+          <Banner alert tone="fault" title="Not saved" className="mt-6">
             {sentenceOf(update.error)}
           </Banner>
         ) : null}

@@ -1,3 +1,4 @@
+import { useId } from 'react';
 import { useFormContext, useWatch } from 'react-hook-form';
 import { circumstanceNames } from '../../../../server/contract/households.ts';
 import type { CircumstanceName, Circumstances } from '../../../../server/contract/households.ts';
@@ -21,12 +22,17 @@ function CircumstanceQuestion({ name }: { name: CircumstanceName }) {
   const { register, control, formState } = useFormContext<CircumstanceValues>();
   const answer = useWatch({ control, name: `circumstances.${name}.answer` });
   const errors = formState.errors.circumstances?.[name];
+  const questionId = useId();
   return (
-    <fieldset className="border-t border-line py-3">
-      <legend className="float-left mb-1 w-full pt-2 font-semibold md:w-1/2 md:pr-6">
+    <div
+      role="radiogroup"
+      aria-labelledby={questionId}
+      className="grid grid-cols-[minmax(0,1fr)] items-center gap-x-6 border-t border-line py-2 md:grid-cols-2"
+    >
+      <p id={questionId} className="pt-1 font-semibold md:pt-0">
         {circumstanceWords[name]}
-      </legend>
-      <div className="flex flex-wrap gap-x-6 md:pl-2">
+      </p>
+      <div className="flex flex-wrap gap-x-6">
         {answers.map((option) => (
           <Radio
             key={option.value}
@@ -37,20 +43,20 @@ function CircumstanceQuestion({ name }: { name: CircumstanceName }) {
         ))}
       </div>
       {answer === 'yes' ? (
-        <div className="clear-both grid grid-cols-2 gap-4 pt-2 sm:max-w-md">
+        <div className="grid grid-cols-2 gap-4 pt-1 pb-2 md:col-start-2">
           <Field label="Since" optional error={errors?.from?.message}>
             {(props) => (
               <DateInput {...props} {...register(`circumstances.${name}.from`, emptyToNull)} />
             )}
           </Field>
-          <Field label="Until" hint={null} optional error={errors?.to?.message}>
+          <Field label="Until" optional error={errors?.to?.message}>
             {(props) => (
               <DateInput {...props} {...register(`circumstances.${name}.to`, emptyToNull)} />
             )}
           </Field>
         </div>
       ) : null}
-    </fieldset>
+    </div>
   );
 }
 

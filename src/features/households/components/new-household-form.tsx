@@ -58,7 +58,7 @@ export function NewHouseholdForm({ onCreated }: { onCreated: (household: Househo
           </Field>
         </Section>
         {create.error ? (
-          <Banner alert tone="danger" title="Not added" className="mt-6">
+          <Banner alert tone="fault" title="Not added" className="mt-6">
             {sentenceOf(create.error)}
           </Banner>
         ) : null}

@@ -52,9 +52,9 @@ function Drawing({ shape, width }: { shape: OutflowShape; width: number }) {
       className="block"
     >
       <defs>
-        <linearGradient id={`${id}-water`} x1="0" x2="0" y1="0" y2="1">
-          <stop offset="0" className="[stop-color:var(--color-teal)] [stop-opacity:.38]" />
-          <stop offset="1" className="[stop-color:var(--color-teal)] [stop-opacity:.14]" />
+        <linearGradient id={`${id}-water`} x1="0" x2="0" y1="0" y2="1" className="text-teal">
+          <stop offset="0" stopColor="currentColor" stopOpacity=".38" />
+          <stop offset="1" stopColor="currentColor" stopOpacity=".14" />
         </linearGradient>
         <pattern id={`${id}-unsettled`} width="7" height="7" patternUnits="userSpaceOnUse">
           <path d="M0 7L7 0" className="stroke-ink-faint" strokeWidth="1" opacity=".55" />
@@ -175,9 +175,11 @@ export function OutflowPicture({ outflow }: { outflow: Outflow }) {
       {shape.total > 0 ? (
         <ul className="mt-2 flex flex-wrap gap-x-5 gap-y-1 text-sm text-ink-soft">
           {shape.dueNow > 0 ? <Key className="bg-amber/50">may leave now</Key> : null}
-          <Key className="bg-teal/35">leaves in its year</Key>
+          {shape.steps.some((step) => step.leaving > 0) ? (
+            <Key className="bg-teal/35">leaves in its year</Key>
+          ) : null}
           {shape.unsettled > 0 ? (
-            <Key className="bg-[repeating-linear-gradient(135deg,var(--color-ink-faint)_0_1px,transparent_1px_4px)]">
+            <Key className="text-ink-faint bg-[repeating-linear-gradient(135deg,currentColor_0_1px,transparent_1px_4px)]">
               not settled yet
             </Key>
           ) : null}

@@ -40,16 +40,19 @@ function describeOutflow(outflow: Outflow, total: number): string {
   return `${countSheets(total)} in the house: ${tail}.`;
 }
 
+/** Years shown at least, so that a tide has room to go out. */
+const fewestYears = 5;
+
 /**
  * The levels of the outflow picture, from what the server counted: every year from this one to the last
- * in which something leaves, each with the sheets in the house before and after it.
+ * in which something leaves (a few at least), each with the sheets in the house before and after it.
  */
 export function shapeOutflow(outflow: Outflow): OutflowShape {
   const byYear = new Map(outflow.years.map((y) => [y.year, y.sheets]));
   const leavingLater = outflow.years.reduce((sum, y) => sum + y.sheets, 0);
   const total = outflow.dueNow + leavingLater + outflow.permanent + outflow.open;
   const first = Number(outflow.today.slice(0, 4));
-  const last = Math.max(first, ...outflow.years.map((y) => y.year));
+  const last = Math.max(first + fewestYears - 1, ...outflow.years.map((y) => y.year));
   const steps: OutflowStep[] = [];
   let level = total - outflow.dueNow;
   for (let year = Math.min(first, ...byYear.keys()); year <= last; year += 1) {

@@ -60,7 +60,7 @@ export function EnterPaperDialog({
     >
       <form noValidate onSubmit={(event) => void submit(event)} className="space-y-4">
         {enter.error ? (
-          <Banner alert tone="danger" title="Not entered">
+          <Banner alert tone="fault" title="Not entered">
             {sentenceOf(enter.error)}
           </Banner>
         ) : null}
@@ -106,7 +106,9 @@ export function EnterPaperDialog({
               {(props) => (
                 <DateInput
                   {...props}
-                  {...register('facts.dates.issued', { setValueAs: (v) => v || undefined })}
+                  {...register('facts.dates.issued', {
+                    setValueAs: (v: string | undefined) => v || undefined,
+                  })}
                 />
               )}
             </Field>
@@ -114,7 +116,9 @@ export function EnterPaperDialog({
               {(props) => (
                 <DateInput
                   {...props}
-                  {...register('facts.dates.expiry', { setValueAs: (v) => v || undefined })}
+                  {...register('facts.dates.expiry', {
+                    setValueAs: (v: string | undefined) => v || undefined,
+                  })}
                 />
               )}
             </Field>

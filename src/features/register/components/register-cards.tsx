@@ -1,7 +1,7 @@
 import type { PaperRow } from '../../../../server/contract/papers.ts';
 import { Badge } from '../../../components/ui/badge.tsx';
 import { formatDay } from '../../../lib/format.ts';
-import { describeStay, statusWords } from '../logic/words.ts';
+import { describeStayAlone, statusWords } from '../logic/words.ts';
 import { PaperName } from './paper-name.tsx';
 
 /** The register on a phone: one paper below the other. */
@@ -25,7 +25,7 @@ export function RegisterCards({ rows }: { rows: PaperRow[] }) {
             <Badge tone={row.held ? 'hold' : row.status === 'to-review' ? 'good' : 'neutral'}>
               {statusWords[row.status]}
             </Badge>
-            <span className="text-ink-soft">Keep until: {describeStay(row)}</span>
+            <span className="text-ink-soft">{describeStayAlone(row)}</span>
           </p>
         </li>
       ))}

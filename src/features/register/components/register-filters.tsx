@@ -1,41 +1,41 @@
 import { useEffect, useState } from 'react';
-import { Columns3, Search, X } from 'lucide-react';
-import { classGroupLabels, classGroups } from '../../../../server/contract/document-classes.ts';
+import { Columns3, Search, SlidersHorizontal, X } from 'lucide-react';
 import { paperStatuses, pileLabels, piles } from '../../../../server/contract/papers.ts';
 import { Button } from '../../../components/ui/button.tsx';
 import { Field } from '../../../components/ui/field.tsx';
 import { Menu, MenuCheck } from '../../../components/ui/menu.tsx';
 import { Select } from '../../../components/ui/select.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
+import { formatDay } from '../../../lib/format.ts';
+import { joinClasses } from '../../../lib/join-classes.ts';
 import type { FilterName, Filters } from '../logic/filters.ts';
 import { filterNames } from '../logic/filters.ts';
 import type { ColumnVisibility } from '../logic/use-columns.ts';
 import { statusWords } from '../logic/words.ts';
+import { KindFilter } from './kind-filter.tsx';
 import { columns, fixedColumns } from './register-columns.tsx';
 
 /** Asked a moment after the last letter, not with each. */
 const typingPauseMs = 300;
 
-/** Search and filters of the register. */
-export function RegisterFilters({
-  filters,
-  boxes,
-  onChange,
-  onClear,
-}: {
+interface RegisterFiltersProps {
   filters: Filters;
   boxes: { id: string; code: string; label: string }[];
-  onChange: (name: FilterName, value: string) => void;
+  onChange: (change: Partial<Filters>) => void;
   onClear: () => void;
-}) {
-  const isFiltered = filterNames.some((name) => filters[name] !== '');
+}
+
+/** Search and filters of the register; on a phone the filters wait behind a button. */
+export function RegisterFilters({ filters, boxes, onChange, onClear }: RegisterFiltersProps) {
+  const [isOpen, setIsOpen] = useState(false);
+  const set = filterNames.filter((name) => name !== 'q' && filters[name] !== '').length;
   const choose = (name: FilterName, label: string, choices: [string, string][]) => (
     <Field label={label} className="w-full sm:w-40">
       {(props) => (
         <Select
           {...props}
           value={filters[name]}
-          onChange={(event) => onChange(name, event.target.value)}
+          onChange={(event) => onChange({ [name]: event.target.value })}
         >
           <option value="">All</option>
           {choices.map(([value, words]) => (
@@ -49,35 +49,54 @@ export function RegisterFilters({
   );
   return (
     <search className="mb-4 flex flex-wrap items-end gap-3">
-      <SearchBox value={filters.q} onSearch={(q) => onChange('q', q)} />
-      {choose(
-        'status',
-        'State',
-        paperStatuses.map((status) => [status, statusWords[status]]),
-      )}
-      {choose(
-        'group',
-        'Group',
-        classGroups.map((group) => [group, classGroupLabels[group]]),
-      )}
-      {choose(
-        'pile',
-        'Pile',
-        piles.map((pile) => [pile, pileLabels[pile]]),
-      )}
-      {boxes.length > 0
-        ? choose(
-            'box',
-            'Box',
-            boxes.map((box) => [box.id, `${box.code} ${box.label}`.trim()]),
-          )
-        : null}
-      {choose('held', 'Don’t destroy yet', [
-        ['true', 'set'],
-        ['false', 'not set'],
-      ])}
-      {isFiltered ? (
-        <Button icon={<X aria-hidden />} onClick={onClear}>
+      <SearchBox value={filters.q} onSearch={(q) => onChange({ q })} />
+      <Button
+        className="sm:hidden"
+        icon={<SlidersHorizontal aria-hidden />}
+        aria-expanded={isOpen}
+        aria-controls="register-filters"
+        onClick={() => setIsOpen(!isOpen)}
+      >
+        {set > 0 ? `Filters (${set} set)` : 'Filters'}
+      </Button>
+      <div
+        id="register-filters"
+        className={joinClasses(
+          'w-full flex-wrap items-end gap-3 sm:flex sm:w-auto',
+          isOpen ? 'flex' : 'hidden',
+        )}
+      >
+        <KindFilter filters={filters} onChange={onChange} />
+        {choose(
+          'status',
+          'State',
+          paperStatuses.map((status) => [status, statusWords[status]]),
+        )}
+        {choose(
+          'pile',
+          'Pile',
+          piles.map((pile) => [pile, pileLabels[pile]]),
+        )}
+        {boxes.length > 0
+          ? choose(
+              'box',
+              'Box',
+              boxes.map((box) => [box.id, `${box.code} ${box.label}`.trim()]),
+            )
+          : null}
+        {choose('held', 'Don’t destroy yet', [
+          ['true', 'set'],
+          ['false', 'not set'],
+        ])}
+      </div>
+      {filters.dueBy ? (
+        <Button icon={<X aria-hidden />} onClick={() => onChange({ dueBy: '' })}>
+          May go by {formatDay(filters.dueBy)}
+          <span className="sr-only">: show papers of any date</span>
+        </Button>
+      ) : null}
+      {set > 0 || filters.q ? (
+        <Button tone="plain" onClick={onClear}>
           Show all
         </Button>
       ) : null}

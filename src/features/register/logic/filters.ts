@@ -1,7 +1,16 @@
 /** The register's filters live in the address, so that a view can be kept and sent on. */
 import type { RegisterQuery } from '../api/list-papers.ts';
 
-export const filterNames = ['q', 'status', 'group', 'pile', 'box', 'held'] as const;
+export const filterNames = [
+  'q',
+  'status',
+  'group',
+  'class',
+  'pile',
+  'box',
+  'held',
+  'dueBy',
+] as const;
 export type FilterName = (typeof filterNames)[number];
 export type Filters = Record<FilterName, string>;
 

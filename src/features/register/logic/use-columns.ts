@@ -36,8 +36,11 @@ function readStored(): ColumnVisibility {
   try {
     const stored: unknown = JSON.parse(localStorage.getItem(storageKey) ?? 'null');
     if (stored && typeof stored === 'object') {
-      const flags = Object.entries(stored).filter(([, value]) => typeof value === 'boolean');
-      return { ...usual, ...(Object.fromEntries(flags) as ColumnVisibility) };
+      const flags: ColumnVisibility = { ...usual };
+      for (const [id, isShown] of Object.entries(stored)) {
+        if (typeof isShown === 'boolean') flags[id] = isShown;
+      }
+      return flags;
     }
   } catch {
     // Unreadable: the usual columns.

@@ -11,6 +11,13 @@ export const statusWords: Record<PaperStatus, string> = {
 
 export const keptWords = { duty: 'a duty', use: 'use', dear: 'it is dear' } as const;
 
+/** The same as a sentence that stands alone. */
+export function describeStayAlone(row: PaperRow): string {
+  const stay = describeStay(row);
+  if (row.permanent && !row.leftOn) return 'stays for good';
+  return row.keepUntil && stay === formatDay(row.keepUntil) ? `keep until ${stay}` : stay;
+}
+
 /** Until when a paper stays, in words. */
 export function describeStay(row: PaperRow): string {
   if (row.leftOn) return `left on ${formatDay(row.leftOn)}`;

@@ -14,7 +14,7 @@ export function CalendarAddress({ householdId }: { householdId: string }) {
   return (
     <div className="space-y-4">
       {make.error ? (
-        <Banner alert tone="danger" title="No address was made">
+        <Banner alert tone="fault" title="No address was made">
           {sentenceOf(make.error)}
         </Banner>
       ) : null}

@@ -25,7 +25,7 @@ export function LeadDaysForm({ household }: { household: Household }) {
       }}
     >
       {save.error ? (
-        <Banner alert tone="danger" className="mb-4" title="Not saved">
+        <Banner alert tone="fault" className="mb-4" title="Not saved">
           {sentenceOf(save.error)}
         </Banner>
       ) : null}

@@ -42,7 +42,7 @@ export function CutDialog({ paper, pageIndex, onCut, onClose }: CutDialogProps) 
         </Button>
       }
     >
-      {failure && <Banner tone="danger" alert title={failure} className="mb-4" />}
+      {failure && <Banner tone="fault" alert title={failure} className="mb-4" />}
       <ol className="flex flex-wrap items-end gap-x-2 gap-y-4">
         {paper.pages.map((page) => (
           <li

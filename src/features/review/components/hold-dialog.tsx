@@ -40,7 +40,7 @@ export function HoldDialog({ paperId, onPlace, onClose }: HoldDialogProps) {
       description="Nothing that this covers can be shredded or recycled until it is lifted again, whatever its date."
     >
       <form onSubmit={(event) => void submit(event)} noValidate className="space-y-4">
-        {errors.root && <Banner tone="danger" alert title={errors.root.message} />}
+        {errors.root && <Banner tone="fault" alert title={errors.root.message} />}
         <fieldset>
           <legend className="font-semibold">It covers</legend>
           <Radio

@@ -34,7 +34,7 @@ export function JoinDialog({ paper, onJoin, onClose }: JoinDialogProps) {
       title="Join into one paper"
       description="Both are read and dated anew as one."
     >
-      {failure && <Banner tone="danger" alert title={failure} className="mb-4" />}
+      {failure && <Banner tone="fault" alert title={failure} className="mb-4" />}
       <div className="grid grid-cols-2 gap-4">
         {paper.previousInScan && (
           <Neighbour

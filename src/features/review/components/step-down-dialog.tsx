@@ -53,7 +53,7 @@ export function StepDownDialog({ paper, onStepDown, onClose }: StepDownDialogPro
       }
     >
       <form onSubmit={(event) => void submit(event)} noValidate className="space-y-4">
-        {failure && <Banner tone="danger" alert title={failure} />}
+        {failure && <Banner tone="fault" alert title={failure} />}
         <Field label="Why the shorter time is enough" error={fault}>
           {(control) => (
             <TextArea

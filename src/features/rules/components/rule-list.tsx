@@ -4,7 +4,7 @@ import { Badge } from '../../../components/ui/badge.tsx';
 import { formatDay } from '../../../lib/format.ts';
 import { sourceStatusWords } from '../../../lib/source-words.ts';
 
-export const basisWords: Record<RuleView['basis'], string> = {
+const basisWords: Record<RuleView['basis'], string> = {
   law: 'law: must be kept',
   guidance: 'guidance: advised to keep',
   practice: 'common practice: advised to keep',

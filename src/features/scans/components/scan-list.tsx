@@ -57,7 +57,7 @@ function ScanState({ scan }: { scan: Scan }) {
         </span>
       );
     case 'failed':
-      return <Badge tone="danger">not readable</Badge>;
+      return <Badge tone="soon">not readable</Badge>;
     case 'read':
       return (
         <span className="text-sm text-ink-soft tabular-nums">

@@ -3,7 +3,6 @@ import { useQueryClient } from '@tanstack/react-query';
 import { scanEndpoints } from '../../../../server/contract/scans.ts';
 import { sentenceOf } from '../../../lib/api-error.ts';
 import { uploadForm } from '../../../lib/upload-form.ts';
-import { scansQuery } from '../api/list-scans.ts';
 
 export type SendingState = 'waiting' | 'sending' | 'sent' | 'here-already' | 'refused' | 'failed';
 
@@ -52,7 +51,7 @@ export function useSending(boxId: string) {
           state: !result?.accepted ? 'refused' : result.alreadyHere ? 'here-already' : 'sent',
           reason: result?.reason ?? null,
         });
-        void queryClient.invalidateQueries({ queryKey: scansQuery(boxId).queryKey });
+        void queryClient.invalidateQueries({ queryKey: ['boxes', boxId] });
       } catch (error) {
         change(entry.key, { state: 'failed', reason: sentenceOf(error) });
       }
@@ -60,17 +59,19 @@ export function useSending(boxId: string) {
     [boxId, change, queryClient],
   );
 
-  const work = useCallback(() => {
-    while (running.current < lanes) {
-      const next = waiting.current.shift();
-      if (!next) return;
-      running.current += 1;
-      void sendOne(next).finally(() => {
-        running.current -= 1;
-        work();
-      });
+  /** Sends one after the other until none waits. */
+  const runLane = useCallback(async () => {
+    running.current += 1;
+    for (let next = waiting.current.shift(); next; next = waiting.current.shift()) {
+      await sendOne(next);
     }
+    running.current -= 1;
   }, [sendOne]);
+
+  const work = useCallback(() => {
+    const most = Math.min(lanes - running.current, waiting.current.length);
+    for (let i = 0; i < most; i += 1) void runLane();
+  }, [runLane]);
 
   const send = useCallback(
     (chosen: File[]) => {

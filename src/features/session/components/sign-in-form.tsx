@@ -31,7 +31,7 @@ export function SignInForm({ onSignedIn }: { onSignedIn: () => void }) {
   return (
     <form noValidate onSubmit={submit} className="flex flex-col gap-5">
       {signIn.error && faults.length === 0 ? (
-        <Banner alert tone="danger">
+        <Banner alert tone="fault">
           {sentenceOf(signIn.error)}
         </Banner>
       ) : null}

@@ -29,7 +29,7 @@ export function RefusalBanner({ error, title, className }: RefusalBannerProps) {
     ...(problem?.fields ?? []).map((field) => field.message),
   ];
   return (
-    <Banner alert tone="danger" title={title} {...(className ? { className } : {})}>
+    <Banner alert tone="fault" title={title} {...(className ? { className } : {})}>
       <p>{sentenceOf(error)}</p>
       {sentences.length > 0 ? (
         <ul className="mt-1 list-disc pl-5">

@@ -58,7 +58,7 @@ export function SubjectDialog({
     >
       <form noValidate onSubmit={(event) => void submit(event)} className="space-y-4">
         {save.error ? (
-          <Banner alert tone="danger" title="Not saved">
+          <Banner alert tone="fault" title="Not saved">
             {sentenceOf(save.error)}
           </Banner>
         ) : null}
