@@ -48,7 +48,7 @@ export function RegisterFilters({ filters, boxes, onChange, onClear }: RegisterF
     </Field>
   );
   return (
-    <search className="mb-4 flex flex-wrap items-end gap-3">
+    <div role="search" className="mb-4 flex flex-wrap items-end gap-3">
       <SearchBox value={filters.q} onSearch={(q) => onChange({ q })} />
       <Button
         className="sm:hidden"
@@ -100,7 +100,7 @@ export function RegisterFilters({ filters, boxes, onChange, onClear }: RegisterF
           Show all
         </Button>
       ) : null}
-    </search>
+    </div>
   );
 }
 
