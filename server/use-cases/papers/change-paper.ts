@@ -66,6 +66,8 @@ function decideChange(
     values.facts = withKeyDate(paper.facts, classId, country);
   }
   if (answers) values.answers = { ...paper.answers, ...answers };
+  // A step down was a decision about the paper as it was understood then.
+  if (values.class || values.facts || answers) values.steppedDown = null;
   Object.assign(values, decideState(paper, { pile, status }, actor, day));
   return { values, sentence: describePatch(paper, patch), action: 'paper.changed' };
 }

@@ -2,6 +2,7 @@
 import type { Paper } from '../../contract/papers.ts';
 import { appendEvent } from '../../db/repositories/event-repository.ts';
 import { findHousehold, takeNumbers } from '../../db/repositories/household-repository.ts';
+import { type HoldRow, insertHold } from '../../db/repositories/hold-repository.ts';
 import { insertPaperChange } from '../../db/repositories/paper-change-repository.ts';
 import {
   assignPages,
@@ -27,7 +28,13 @@ import {
 import { inTransaction, type Transaction } from '../../db/transaction.ts';
 import { ConflictError, InvalidInputError, StaleVersionError } from '../../errors.ts';
 import { readPaper } from '../../reading/papers.ts';
-import { type AssessContext, assessPaper, loadAssessContext } from '../assess-paper.ts';
+import {
+  type AssessContext,
+  assessPaper,
+  holdsOfPaper,
+  loadAssessContext,
+  reassessPapers,
+} from '../assess-paper.ts';
 import { type Actor, requireReach, requireVisible } from './actor.ts';
 import { columnsOfReading, countSheets, readingContextOf, toPageText } from './create-papers.ts';
 import { type PaperDay, requireNotApproved, requireNotLeft } from './save-change.ts';
@@ -61,6 +68,9 @@ export async function splitPaper(
       ]);
     }
     const tools = await loadTools(paper, day, transaction);
+    const holds = holdsOfPaper(paper.id, tools.context).filter(
+      (hold) => hold.paperId !== null && hold.liftedOn === null,
+    );
     const number = await takeNumbers(paper.householdId, 'nextPaperNumber', 1, transaction);
     const head = pages.slice(0, beforePage - 1);
     const tail = pages.slice(beforePage - 1);
@@ -78,6 +88,7 @@ export async function splitPaper(
     );
     await assignPages(paper.id, idsOf(head), transaction);
     await assignPages(second.id, idsOf(tail), transaction);
+    await copyHolds(holds, second.id, day, transaction);
     await record(
       paper,
       `split before page ${beforePage}; the rest is paper ${number}.`,
@@ -122,7 +133,11 @@ export async function joinPaper(
     await repointPaper(second.id, first.id, transaction);
     await removePaper(second.id, transaction);
     const tools = await loadTools(first, day, transaction);
-    await changePaper(first.id, first.version, reread(first.id, pages, tools), transaction);
+    const values = {
+      ...reread(first.id, pages, tools),
+      eyesOnlyUserId: first.eyesOnlyUserId ?? second.eyesOnlyUserId,
+    };
+    await changePaper(first.id, first.version, values, transaction);
     await record(
       first,
       `joined with paper ${second.number}.`,
@@ -135,6 +150,19 @@ export async function joinPaper(
   });
   if (keptId === null) throw new StaleVersionError(await getPaper(target.id, actor, day));
   return getPaper(keptId, actor, day);
+}
+
+/** What was held stays held in both parts, with the reason, the placer and the day. */
+async function copyHolds(
+  holds: HoldRow[],
+  paperId: string,
+  day: PaperDay,
+  transaction: Transaction,
+): Promise<void> {
+  const [first] = holds;
+  if (!first) return;
+  for (const { id: _id, ...hold } of holds) await insertHold({ ...hold, paperId }, transaction);
+  await reassessPapers({ householdId: first.householdId, ids: [paperId] }, day, transaction);
 }
 
 /** @throws ConflictError unless the two follow each other in one scan */

@@ -29,10 +29,11 @@ import {
 } from '../../errors.ts';
 import type { Assessment } from '../../contract/assessments.ts';
 import { assessPaper, loadAssessContext } from '../assess-paper.ts';
-import { type Actor, canSee } from '../papers/actor.ts';
+import { type Actor, canSee, requireReach } from '../papers/actor.ts';
 import { requireMandate } from '../papers/depart-paper.ts';
 import { askGate, nameReasons } from '../papers/gate-paper.ts';
 import type { PaperDay } from '../papers/save-change.ts';
+import { findChanges } from './approved-rows.ts';
 import { record } from './decide-list.ts';
 import { describeRow, getShredList } from './view-list.ts';
 
@@ -60,7 +61,16 @@ export async function recordDestruction(
         'There are papers on this list that you may not see. Somebody else has to record it.',
       );
     }
-    const assessments = await requireGateOpen(papers, outcomes, input, day, transaction);
+    for (const paper of papers) requireReach(actor, paper.classGroup, 'recording its destruction');
+    const assessments = await requireGateOpen(
+      list,
+      papers,
+      rows,
+      outcomes,
+      input,
+      day,
+      transaction,
+    );
     const boxCodes = await listBoxCodes(list.householdId);
     for (const row of rows) {
       const paper = papers.find((p) => p.id === row.paperId);
@@ -184,21 +194,22 @@ function requireOutcomes(rows: ShredRowRow[], input: Destruction): Map<string, O
 
 /** Fresh sums for the day of the act; answers the assessment of each paper that was destroyed. */
 async function requireGateOpen(
+  list: ShredListRow,
   papers: StoredPaper[],
+  rows: ShredRowRow[],
   outcomes: Map<string, Outcome>,
   input: Destruction,
   day: PaperDay,
   transaction: Transaction,
 ): Promise<Map<string, Assessment>> {
-  const first = papers[0];
   const assessments = new Map<string, Assessment>();
-  if (!first) return assessments;
-  const context = await loadAssessContext(first.householdId, day, transaction);
+  const context = await loadAssessContext(list.householdId, day, transaction);
   const reasons: Reason[] = [];
   for (const paper of papers) {
     if (outcomes.get(paper.id) !== 'destroyed') continue;
     const answer = askGate(paper, context, { how: 'shred', on: input.on, today: day.today });
-    reasons.push(...nameReasons(paper, answer.reasons));
+    const row = rows.find((r) => r.paperId === paper.id);
+    reasons.push(...nameReasons(paper, [...answer.reasons, ...findChanges(row, paper)]));
     assessments.set(paper.id, answer.assessment);
   }
   if (reasons.length > 0) throw new GateClosedError(reasons);

@@ -36,6 +36,7 @@ import { requireDelegateMay, requireMandate } from '../papers/depart-paper.ts';
 import { askGate, nameReasons } from '../papers/gate-paper.ts';
 import type { PaperDay } from '../papers/save-change.ts';
 import { askForApproval, type ListMailDeps, tellOfApproval } from './list-mail.ts';
+import { keepWhatWasSeen } from './keep-what-was-seen.ts';
 import { getShredList } from './view-list.ts';
 
 interface Target {
@@ -148,6 +149,7 @@ export async function approveShredList(
     }
     for (const paper of leaving) requireMayApprove(actor, paper);
     await requireGateOpen(leaving, list, day, transaction);
+    await keepWhatWasSeen(rows, leaving, list, transaction);
     for (const paper of papers.filter((p) => keepBack.has(p.id))) {
       await keepPaper(paper, list, actor, day, transaction);
     }

@@ -19,6 +19,7 @@ import { type AssessContext, findDecidingRule, loadAssessContext } from '../asse
 import { type Actor, canSee, hasEndedMandate } from '../papers/actor.ts';
 import { askGate } from '../papers/gate-paper.ts';
 import type { PaperDay } from '../papers/save-change.ts';
+import { findChanges } from './approved-rows.ts';
 
 /** @throws NotFoundError */
 export async function getShredList(id: string, actor: Actor, day: PaperDay): Promise<ShredList> {
@@ -96,12 +97,15 @@ async function viewRows(list: ShredListRow, actor: Actor, day: PaperDay) {
     paper.assessment.cautions.forEach((caution) => own.add(caution));
     const firstPageId = firstPages.get(paper.id)?.id ?? null;
     // What was decided stays as it was printed.
-    if (row.snapshot) return [{ ...row.snapshot, position: row.position, firstPageId }];
+    if (isOver && row.snapshot) return [{ ...row.snapshot, position: row.position, firstPageId }];
     return [
       {
         ...describeRow(row, paper, boxCodes.get(paper.boxId ?? '') ?? null),
         firstPageId,
-        blocked: isOver || row.keptBack ? [] : blockedNow(paper, list, context, day),
+        blocked:
+          isOver || row.keptBack
+            ? []
+            : [...blockedNow(paper, list, context, day), ...findChanges(row, paper)],
       },
     ];
   });
