@@ -1,7 +1,7 @@
 /** Builds the web application without listening. */
 import { existsSync } from 'node:fs';
 import path from 'node:path';
-import express, { type Express } from 'express';
+import express, { type Express, type RequestHandler } from 'express';
 import helmet from 'helmet';
 import { requireCsrfToken } from './auth/csrf.ts';
 import { createPassport, createSessions } from './auth/sign-in.ts';
@@ -76,7 +76,7 @@ export function createApp(deps: Deps): App {
   api.use(healthRoutes(deps));
   api.use(calendarRoutes(deps));
   api.use('/api', express.json({ limit: '1mb' }), sessions.handler);
-  api.use('/api', passport.initialize(), passport.session());
+  api.use('/api', passport.initialize() as RequestHandler, passport.session() as RequestHandler);
   api.use('/api', (request, _response, next) => {
     request.caller = request.user;
     next();

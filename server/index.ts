@@ -11,13 +11,13 @@ const app = createApp(deps);
 const server = createServer(app.express);
 
 server.on('error', (error: NodeJS.ErrnoException) => {
-  console.error(
+  const sentence =
     error.code === 'EADDRINUSE'
       ? `Port ${config.port} on ${config.host} is taken. Stop what uses it, or set PORT to another number.`
       : error.code === 'EACCES'
         ? `Port ${config.port} may not be used by this account. Set PORT to a number above 1023.`
-        : `The server could not listen on ${config.host}:${config.port} (${error.code ?? error.message}).`,
-  );
+        : `The server could not listen on ${config.host}:${config.port} (${error.code ?? error.message}).`;
+  process.stderr.write(`${sentence}\n`);
   process.exit(1);
 });
 server.listen(config.port, config.host, () => {

@@ -137,7 +137,7 @@ function roundConfidence(value: number): number {
 
 /** Reads the files in their order; true when all could be read. */
 async function readFiles(request: Request): Promise<boolean> {
-  const tables = await loadRuleTables();
+  const tables = loadRuleTables();
   const reader = createPageReader({ onFault: (detail) => process.stderr.write(`${detail}\n`) });
   let allRead = true;
   // The next file is opened and read while the last one's papers are worked out.

@@ -99,6 +99,6 @@ function executeWith(database: Database, transaction: Transaction) {
       bind: values.map((value) => (value === undefined ? null : value)),
       transaction,
     });
-    return { rows: rows as unknown[] };
+    return { rows };
   };
 }

@@ -57,7 +57,7 @@ export function createUploadReceiver(
 /** Removes parts that were not taken over. */
 export async function discardReceived(files: ReceivedFile[]): Promise<void> {
   await Promise.all(
-    files.map((file) => (file.partPath ? rm(file.partPath, { force: true }) : undefined)),
+    files.flatMap(({ partPath }) => (partPath ? [rm(partPath, { force: true })] : [])),
   );
 }
 

@@ -36,7 +36,7 @@ function scoreSameLine(date: RoledDate, label: LabelSpot, dates: readonly RoledD
   if (label.end > date.start) return 0;
   const between = dates.some((other) => other.start >= label.end && other.end <= date.start);
   const gapText = date.line.text.slice(label.end, date.start);
-  const gap = gapText.replace(/[\s:.\-]/g, '').length;
+  const gap = gapText.replace(/[\s:.-]/g, '').length;
   if (between || gap > (label.isNear ? 2 : 45)) return 0;
   const isProse = label.role === 'issued' && isInProse(date, label);
   return label.strength - gap * 0.02 - (isProse ? 0.4 : 0);

@@ -52,7 +52,7 @@ function normaliseLine(text: string): string {
   return text
     .toUpperCase()
     .replace(/[«»]/g, '<<')
-    .replace(/[‹›(\[{]/g, '<')
+    .replace(/[‹›([{]/g, '<')
     .replace(/[^A-Z0-9<]/g, '');
 }
 

@@ -51,7 +51,7 @@ export function readTextLayer(content: TextContent, viewport: PageViewport): Wor
 
 function placePiece(item: TextItem, viewport: PageViewport): Piece | null {
   const [a, b, , , e, f] = item.transform as number[];
-  const [va, vb, vc, vd] = viewport.transform as number[];
+  const [va, vb, vc, vd] = viewport.transform;
   const along = { x: a! * va! + b! * vc!, y: a! * vb! + b! * vd! };
   if (along.x <= 0 || Math.abs(along.y) > 0.1 * along.x) return null;
   const [x, baseline] = viewport.convertToViewportPoint(e!, f!) as [number, number];

@@ -258,7 +258,8 @@ function completeTerms(given: MembershipTerms): MembershipTerms {
 function readLink(link: AccountTokenRow | null) {
   const terms = membershipTermsSchema.safeParse(link?.payload.terms);
   if (!link || !terms.success) throw new ConflictError(linkIsOver);
-  return { link, terms: terms.data, name: String(link.payload.name ?? '') };
+  const { name } = link.payload;
+  return { link, terms: terms.data, name: typeof name === 'string' ? name : '' };
 }
 
 function viewInvitation(row: AccountTokenRow, now: Date): Invitation {
