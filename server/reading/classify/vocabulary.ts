@@ -89,7 +89,8 @@ function findLine(
   counter: LineCounter,
 ): number {
   for (let length = path.length; length > 0; length -= 1) {
-    const parent: unknown = length > 1 ? document.getIn(path.slice(0, length - 1), true) : document.contents;
+    const parent: unknown =
+      length > 1 ? document.getIn(path.slice(0, length - 1), true) : document.contents;
     if (isMap(parent)) {
       const pair = parent.items.find((item) => String(item.key) === String(path[length - 1]));
       if (pair && isNode(pair.key) && pair.key.range)
