@@ -30,6 +30,40 @@ export interface DemoHousehold {
   filings: { taxYear: string; answer: 'on-time' | 'on-day'; filedOn?: string }[];
 }
 
+interface DemoBundle {
+  class: 'bank-statement' | 'utility-bill' | 'telecom-bill';
+  title: string;
+  from: string;
+  to: string;
+  sheets: number;
+  issuer: string;
+  /** Where it lies, if it stays; a pile if it goes. */
+  place?: string;
+  pile?: 'shred';
+}
+
+function describeBundle(bundle: DemoBundle): DemoHousehold['entered'][number] {
+  const answers = { usedForTax: false, endedOn: bundle.to };
+  return {
+    paper: {
+      class: bundle.class,
+      title: bundle.title,
+      bundle: true,
+      bundleFrom: bundle.from,
+      bundleTo: bundle.to,
+      sheets: bundle.sheets,
+      facts: {
+        dates: { periodStart: bundle.from, periodEnd: bundle.to, issued: bundle.to },
+        issuer: bundle.issuer,
+      },
+      ...(bundle.place ? { place: bundle.place } : {}),
+    },
+    decision: bundle.pile
+      ? { pile: bundle.pile, answers }
+      : { pile: 'file-here', keptBecause: 'duty', answers },
+  };
+}
+
 /** @param passportExpiresOn a day within the usual notice, so that a reminder goes out */
 export function describeDemoHouseholds(passportExpiresOn: string): DemoHousehold[] {
   return [
@@ -134,32 +168,54 @@ export function describeDemoHouseholds(passportExpiresOn: string): DemoHousehold
           },
           decision: { pile: 'file-here', keptBecause: 'use' },
         },
-        {
-          paper: {
+        describeBundle({
+          class: 'bank-statement',
+          title: 'Bank statements 2012 to 2014',
+          from: '2012-01-31',
+          to: '2014-12-31',
+          sheets: 36,
+          issuer: 'Corbel & Tarn Bank plc',
+          pile: 'shred',
+        }),
+        describeBundle({
+          class: 'utility-bill',
+          title: 'Electricity and gas bills 2012 to 2016',
+          from: '2012-02-01',
+          to: '2016-11-30',
+          sheets: 22,
+          issuer: 'Normoor Energy',
+          pile: 'shred',
+        }),
+        ...[2021, 2022, 2023, 2024, 2025].map((year) =>
+          describeBundle({
             class: 'bank-statement',
-            title: 'Bank statements 2009 to 2014',
-            bundle: true,
-            bundleFrom: '2009-01-31',
-            bundleTo: '2014-12-31',
-            sheets: 60,
-            facts: {
-              dates: { periodStart: '2009-01-01', periodEnd: '2014-12-31' },
-              issuer: 'Corbel & Tarn Bank plc',
-            },
-          },
-          decision: { pile: 'shred', answers: { usedForTax: false, endedOn: '2014-12-31' } },
-        },
+            title: `Bank statements ${String(year)}`,
+            from: `${String(year)}-01-31`,
+            to: `${String(year)}-12-31`,
+            sheets: 12 + 2 * (2025 - year),
+            issuer: 'Corbel & Tarn Bank plc',
+            place: 'Blue folder',
+          }),
+        ),
+        ...[2021, 2022, 2023, 2024].map((year) =>
+          describeBundle({
+            class: 'telecom-bill',
+            title: `Telephone bills ${String(year)}`,
+            from: `${String(year)}-02-14`,
+            to: `${String(year)}-11-14`,
+            sheets: 8,
+            issuer: 'Larkwire',
+            place: 'Blue folder',
+          }),
+        ),
         {
           paper: {
-            class: 'utility-bill',
-            title: 'Electricity and gas bills 2012 to 2016',
-            bundle: true,
-            bundleFrom: '2012-02-01',
-            bundleTo: '2016-11-30',
-            sheets: 44,
-            facts: { dates: { issued: '2016-11-30' }, issuer: 'Normoor Energy' },
+            class: 'birth-certificate',
+            title: 'Certificates of the family',
+            sheets: 6,
+            place: 'Bureau, top drawer',
           },
-          decision: { pile: 'shred', answers: { usedForTax: false } },
+          decision: { pile: 'file-here', keptBecause: 'duty' },
         },
         {
           paper: {

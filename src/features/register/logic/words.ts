@@ -23,7 +23,12 @@ export function describeStay(row: PaperRow): string {
   if (row.leftOn) return `left on ${formatDay(row.leftOn)}`;
   if (row.permanent) return 'for good';
   if (row.held) return "don't destroy yet";
-  if (row.open) return 'no date yet';
+  if (row.open) return describeOpen(row);
   if (row.keepUntil) return formatDay(row.keepUntil);
   return row.shredFrom ? `may go from ${formatDay(row.shredFrom)}` : 'no date yet';
+}
+
+/** A paper without a date, which may still say until when it is valid. */
+function describeOpen({ expiresOn }: PaperRow): string {
+  return expiresOn ? `no date yet; runs out ${formatDay(expiresOn)}` : 'no date yet';
 }

@@ -56,13 +56,21 @@ const soonDays = 90;
  * advised time counts unless somebody with the right stepped down from it.
  */
 export function decideVerdict(
-  { assessment, steppedDown }: Pick<Paper, 'assessment' | 'steppedDown'>,
+  {
+    assessment,
+    steppedDown,
+    expiresOn,
+  }: Pick<Paper, 'assessment' | 'steppedDown'> & { expiresOn?: string | null },
   today: string,
 ): Verdict {
   if (assessment.heldBy.length > 0)
     return { tone: 'held', headline: 'Don’t destroy yet', on: null };
   if (assessment.permanent) return { tone: 'permanent', headline: 'Keep for good', on: null };
-  if (assessment.open) return { tone: 'open', headline: 'No date yet', on: null };
+  if (assessment.open) {
+    if (!expiresOn) return { tone: 'open', headline: 'No date yet', on: null };
+    const headline = expiresOn < today ? 'No date yet; ran out on' : 'No date yet; valid until';
+    return { tone: 'open', headline, on: expiresOn };
+  }
   const { keepUntil } = assessment;
   const advisedUntil = steppedDown ? null : assessment.advisedUntil;
   if (keepUntil !== null && keepUntil >= today) {
