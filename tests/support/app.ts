@@ -7,7 +7,7 @@ import request from 'supertest';
 import { createApp } from '../../server/app.ts';
 import { createFixedClock, type FixedClock } from '../../server/clock.ts';
 import { loadConfig } from '../../server/config.ts';
-import { connectDatabase } from '../../server/db/connection.ts';
+import { connectDatabase, type Database } from '../../server/db/connection.ts';
 import type { Deps } from '../../server/deps.ts';
 import type { JobQueue, QueueName } from '../../server/jobs/queue.ts';
 import { silentLog } from '../../server/log.ts';
@@ -47,9 +47,14 @@ export interface Visitor {
 /** The day on which tests play unless they say otherwise. */
 export const testNow = '2026-11-07T10:00:00Z';
 
-export async function startTestApp(
-  options: { now?: string; env?: Record<string, string> } = {},
-): Promise<TestApp> {
+export interface TestAppOptions {
+  now?: string;
+  env?: Record<string, string>;
+  /** A queue of one's own instead of the one that only notes; the application does not stop it. */
+  openQueue?: (databaseUrl: string, database: Database) => Promise<JobQueue>;
+}
+
+export async function startTestApp(options: TestAppOptions = {}): Promise<TestApp> {
   const testDatabase = await createTestDatabase();
   const uploadsDir = await mkdtemp(path.join(tmpdir(), 'slackwater-uploads-'));
   const config = loadConfig({
@@ -62,7 +67,8 @@ export async function startTestApp(
   });
   const clock = createFixedClock(options.now ?? testNow);
   const jobs: QueuedJob[] = [];
-  const queue: JobQueue = {
+  const database = connectDatabase(testDatabase.url, 8);
+  const queue: JobQueue = (await options.openQueue?.(testDatabase.url, database)) ?? {
     send: (name, payload) => {
       jobs.push({ name, payload });
       return Promise.resolve();
@@ -70,7 +76,6 @@ export async function startTestApp(
     check: () => Promise.resolve(true),
     stop: () => Promise.resolve(),
   };
-  const database = connectDatabase(testDatabase.url, 5);
   const deps: Deps = {
     config,
     clock,
