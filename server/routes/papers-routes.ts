@@ -2,6 +2,7 @@ import { Router } from 'express';
 import { endpoints } from '../contract/endpoints.ts';
 import type { Deps } from '../deps.ts';
 import { listPaperChanges, undoPaper, updatePaper } from '../use-cases/papers/change-paper.ts';
+import { copyPaper, copyPapers } from '../use-cases/papers/copy-papers.ts';
 import { departPaper, stepDown } from '../use-cases/papers/depart-paper.ts';
 import { enterPaper } from '../use-cases/papers/enter-paper.ts';
 import { exportPapers, listPapers } from '../use-cases/papers/list-papers.ts';
@@ -9,6 +10,7 @@ import { joinPaper, splitPaper } from '../use-cases/papers/rearrange-papers.ts';
 import { getPaper } from '../use-cases/papers/view-paper.ts';
 import { dayOf } from './day-of.ts';
 import { mountForHousehold } from './mount.ts';
+import { sendPdf } from './send-file.ts';
 
 export function paperRoutes(deps: Deps): Router {
   const router = Router();
@@ -19,6 +21,13 @@ export function paperRoutes(deps: Deps): Router {
       .type('text/csv')
       .set('Content-Disposition', 'attachment; filename="papers.csv"')
       .send(csv);
+  });
+  mountForHousehold(router, endpoints.copyPapers, async ({ access, query, response }) => {
+    sendPdf(response, await copyPapers(query, access, deps), 'papers.pdf');
+  });
+  // Before the paper itself: ":id" alone would take "….pdf" for an id.
+  mountForHousehold(router, endpoints.copyPaper, async ({ access, params, response }) => {
+    sendPdf(response, await copyPaper(params.id, access, deps), 'paper.pdf');
   });
   mountForHousehold(router, endpoints.listPapers, ({ access, query }) => listPapers(query, access));
   mountForHousehold(router, endpoints.enterPaper, async ({ access, body }) =>

@@ -86,7 +86,8 @@ export async function exportPapers(query: ListPapersQuery, actor: Actor): Promis
   );
 }
 
-function parseSort(sort: string | undefined): {
+/** @throws InvalidInputError when the field is not one that papers are sorted by */
+export function parseSort(sort: string | undefined): {
   sort?: { field: SortField; descending: boolean };
 } {
   if (sort === undefined) return {};
@@ -103,7 +104,8 @@ function parseSort(sort: string | undefined): {
   return { sort: { field, descending: sort.startsWith('-') } };
 }
 
-function parseFilter(query: ListPapersQuery): RegisterFilter {
+/** @throws InvalidInputError when a value of a filter is not known */
+export function parseFilter(query: ListPapersQuery): RegisterFilter {
   const q = query.q === '' ? undefined : query.q;
   return {
     q,

@@ -1,5 +1,5 @@
 import { useCallback } from 'react';
-import { Download, Files } from 'lucide-react';
+import { Download, FileText, Files } from 'lucide-react';
 import { useSearchParams } from 'react-router-dom';
 import { paperEndpoints } from '../../../server/contract/papers.ts';
 import { PageFrame } from '../../components/layout/page-frame.tsx';
@@ -74,6 +74,18 @@ export function Component() {
                 icon={<Download aria-hidden />}
               >
                 Save as CSV
+              </FileLink>
+            ) : null}
+            {mayExport ? (
+              <FileLink
+                href={buildApiUrl(paperEndpoints.copyPapers, {
+                  params: { id: householdId },
+                  query: filtered,
+                })}
+                download
+                icon={<FileText aria-hidden />}
+              >
+                Save pages as PDF
               </FileLink>
             ) : null}
           </>
