@@ -6,6 +6,7 @@ import { healthEndpoints } from './health.ts';
 import { holdEndpoints } from './holds.ts';
 import { householdEndpoints } from './households.ts';
 import { paperEndpoints } from './papers.ts';
+import { readingQualityEndpoints } from './reading-quality.ts';
 import { calendarEndpoints, reminderEndpoints } from './reminders.ts';
 import { ruleTableEndpoints } from './rule-tables.ts';
 import { scanEndpoints } from './scans.ts';
@@ -20,6 +21,7 @@ export const endpoints = {
   ...boxEndpoints,
   ...scanEndpoints,
   ...paperEndpoints,
+  ...readingQualityEndpoints,
   ...holdEndpoints,
   ...subjectEndpoints,
   ...shredListEndpoints,

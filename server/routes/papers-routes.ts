@@ -8,8 +8,9 @@ import { enterPaper } from '../use-cases/papers/enter-paper.ts';
 import { exportPapers, listPapers } from '../use-cases/papers/list-papers.ts';
 import { joinPaper, splitPaper } from '../use-cases/papers/rearrange-papers.ts';
 import { getPaper } from '../use-cases/papers/view-paper.ts';
+import { showReadingQuality } from '../use-cases/reading/show-reading-quality.ts';
 import { dayOf } from './day-of.ts';
-import { mountForHousehold } from './mount.ts';
+import { mountForHousehold, mountForPractice } from './mount.ts';
 import { sendPdf } from './send-file.ts';
 
 export function paperRoutes(deps: Deps): Router {
@@ -56,6 +57,9 @@ export function paperRoutes(deps: Deps): Router {
   );
   mountForHousehold(router, endpoints.listPaperChanges, ({ access, params }) =>
     listPaperChanges(params.id, access),
+  );
+  mountForPractice(router, endpoints.getReadingQuality, ({ membership }) =>
+    showReadingQuality(membership.practiceId),
   );
   return router;
 }

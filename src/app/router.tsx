@@ -99,6 +99,7 @@ export function createRoutes(queryClient: QueryClient): RouteObject[] {
     { path: 'rules', lazy: () => import('./pages/rule-tables-page.tsx') },
     { path: 'rules/:country', lazy: () => import('./pages/rule-table-page.tsx') },
     { path: 'mail', lazy: () => import('./pages/mail-page.tsx') },
+    { path: 'reading-quality', lazy: () => import('./pages/reading-quality-page.tsx') },
     { path: '*', lazy: () => import('./pages/not-found-page.tsx') },
   ];
   return [

@@ -36,6 +36,12 @@ export function formatShortDay(day: string): string {
   return parts ? `${parts.date} ${parts.month.slice(0, 3)} ${parts.year}` : day;
 }
 
+/** `2025-06` as "June 2025". */
+export function formatMonth(month: string): string {
+  const parts = splitDay(`${month}-01`);
+  return parts ? `${parts.month} ${parts.year}` : month;
+}
+
 /** A day, or a dash where there is none. */
 export function formatDayOrDash(day: string | null): string {
   return day ? formatShortDay(day) : '–';

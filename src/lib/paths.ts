@@ -21,4 +21,5 @@ export const paths = {
   activity: (householdId: string) => `/households/${householdId}/activity`,
   rules: (country?: string) => (country ? `/rules/${country}` : '/rules'),
   mail: () => '/mail',
+  readingQuality: () => '/reading-quality',
 } as const;

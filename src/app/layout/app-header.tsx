@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { BookOpen, ChevronDown, House, LogOut, Mail, UserRound } from 'lucide-react';
+import { BookOpen, ChevronDown, House, LogOut, ScanText, Mail, UserRound } from 'lucide-react';
 import { toast } from 'sonner';
 import { Link, useNavigate } from 'react-router-dom';
 import { Wordmark } from '../../components/layout/wordmark.tsx';
@@ -16,6 +16,7 @@ function AccountMenu() {
   const signOut = useSignOut();
   const session = useSession();
   const mayReadMail = useMay('mail:read');
+  const maySeeQuality = useMay('practice:read');
   const leave = (): void => {
     signOut.mutate(undefined, {
       onSuccess: () => void navigate(paths.signIn(), { replace: true }),
@@ -54,6 +55,14 @@ function AccountMenu() {
           <Link to={paths.mail()}>
             <Mail aria-hidden />
             Messages sent
+          </Link>
+        </MenuItem>
+      ) : null}
+      {maySeeQuality ? (
+        <MenuItem asChild>
+          <Link to={paths.readingQuality()}>
+            <ScanText aria-hidden />
+            How well papers are read
           </Link>
         </MenuItem>
       ) : null}

@@ -1,11 +1,19 @@
 import { useQuery } from '@tanstack/react-query';
+import { FileText } from 'lucide-react';
 import { Link } from 'react-router-dom';
 import { classLabel, type ClassId } from '../../../../server/contract/document-classes.ts';
-import type { Paper, UpdatePaper } from '../../../../server/contract/papers.ts';
+import {
+  type Paper,
+  paperEndpoints,
+  type UpdatePaper,
+} from '../../../../server/contract/papers.ts';
 import { PageHeading } from '../../../components/layout/page-heading.tsx';
 import { Banner } from '../../../components/ui/banner.tsx';
+import { FileLink } from '../../../components/ui/button.tsx';
+import { buildApiUrl } from '../../../lib/api-client.ts';
 import { formatCount } from '../../../lib/format.ts';
 import { paths } from '../../../lib/paths.ts';
+import { useMay } from '../../../lib/use-may.ts';
 import { householdQuery } from '../api/get-household.ts';
 import type { ReviewCommand } from '../logic/key-map.ts';
 import { FactsSection } from './facts-section.tsx';
@@ -46,6 +54,7 @@ export function PaperPanel({
   onCommand,
 }: PaperPanelProps) {
   const { data: household } = useQuery(householdQuery(householdId));
+  const mayExport = useMay('paper:export', householdId);
   const where = [
     `No. ${paper.number}`,
     paper.boxCode && `box ${paper.boxCode}`,
@@ -114,6 +123,16 @@ export function PaperPanel({
           <p className="whitespace-pre-wrap text-ink-soft">{paper.text}</p>
         </details>
       )}
+      {mayExport && paper.pages.length > 0 ? (
+        <FileLink
+          size="small"
+          href={buildApiUrl(paperEndpoints.copyPaper, { params: { id: paper.id } })}
+          download
+          icon={<FileText aria-hidden />}
+        >
+          Save pages as PDF
+        </FileLink>
+      ) : null}
     </div>
   );
 }
