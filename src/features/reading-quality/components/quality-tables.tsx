@@ -5,22 +5,23 @@ import { formatMonth, formatNumber } from '../../../lib/format.ts';
 
 type Counts = Pick<ReadingQuality, 'papers' | 'kindCorrected' | 'dateCorrected'>;
 
-/** "24 of 30 (80 %)": how many needed no correction. */
-function describeRight(papers: number, corrected: number): string {
+/** "24 of 30 (80 %)": how many needed no correction; on a phone without the share. */
+function RightCell({ papers, corrected }: { papers: number; corrected: number }) {
   const right = papers - corrected;
   const share = papers === 0 ? 0 : Math.round((100 * right) / papers);
-  return `${formatNumber(right)} of ${formatNumber(papers)} (${String(share)} %)`;
+  return (
+    <Cell className="text-right whitespace-nowrap tabular-nums">
+      {formatNumber(right)} of {formatNumber(papers)}
+      <span className="hidden text-ink-soft sm:inline"> ({share} %)</span>
+    </Cell>
+  );
 }
 
 function CountCells({ counts }: { counts: Counts }) {
   return (
     <>
-      <Cell className="text-right whitespace-nowrap tabular-nums">
-        {describeRight(counts.papers, counts.kindCorrected)}
-      </Cell>
-      <Cell className="text-right whitespace-nowrap tabular-nums">
-        {describeRight(counts.papers, counts.dateCorrected)}
-      </Cell>
+      <RightCell papers={counts.papers} corrected={counts.kindCorrected} />
+      <RightCell papers={counts.papers} corrected={counts.dateCorrected} />
     </>
   );
 }
