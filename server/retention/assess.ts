@@ -8,12 +8,13 @@ import { findAdvice } from './advice.ts';
 import { combineOutcomes } from './combine.ts';
 import type { Verdict } from './combine.ts';
 import type { CountedRoles } from './conditions.ts';
-import { appliesTo, collectKinds, collectRoles } from './conditions.ts';
+import { appliesTo } from './conditions.ts';
 import type { KnownKinds } from './conditions.ts';
 import { nextDay, wordDay } from './dates.ts';
 import { evaluateRule } from './evaluate-rule.ts';
 import { describeHandling } from './handling.ts';
 import type { Outcome, Scene } from './outcome.ts';
+import { findPlan } from './class-plan.ts';
 import type { IndexedTable, RuleSet } from './rule-set.ts';
 import { normaliseRegion } from './rule-set.ts';
 import type { Rule } from './rule-schema.ts';
@@ -29,24 +30,6 @@ export interface Say {
   readonly rule: Rule;
   readonly outcome: Outcome;
   readonly advice: Advice | null;
-}
-
-/** What the rules of a class tell apart. */
-interface ClassProfile {
-  readonly kinds: KnownKinds;
-  readonly roles: ReadonlySet<CaseRole> | null;
-}
-
-const profiles = new WeakMap<readonly Rule[], ClassProfile>();
-const noRules: readonly Rule[] = [];
-
-function profileOf(own: readonly Rule[], common: readonly Rule[]): ClassProfile {
-  let profile = profiles.get(own);
-  if (!profile) {
-    profile = { kinds: collectKinds([...own, ...common]), roles: collectRoles(own) };
-    if (own !== noRules) profiles.set(own, profile);
-  }
-  return profile;
 }
 
 /** Everything gathered while the rules are asked. */
@@ -102,7 +85,7 @@ function countRoles(inputs: CaseInputs, options: AssessOptions): CountedRoles {
   return options.possibleRoles ? { roles: options.possibleRoles, isStated: false } : roleNotKnown;
 }
 
-/** Asks the country's rules for one owner; then, if none applies, what is common to all countries. */
+/** Asks the country's rules for one owner; then, if none applies, what is common to all; then additions. */
 function askTable(
   country: IndexedTable,
   ruleSet: RuleSet,
@@ -111,19 +94,18 @@ function askTable(
   options: AssessOptions,
   gathering: Gathering,
 ): void {
-  const own = country.byClass.get(retentionCase.class) ?? noRules;
-  const common = ruleSet.common.byClass.get(retentionCase.class) ?? noRules;
-  const { kinds, roles } = profileOf(own, common);
-  const region = normaliseRegion(inputs.region);
+  const plan = findPlan(country, ruleSet.common, retentionCase.class);
+  const { roles, kinds } = plan;
   const scene: Scene = {
     inputs,
     on: retentionCase.on,
     table: country.table,
-    region,
+    region: normaliseRegion(inputs.region),
     steps: gathering.steps,
     assumed: gathering.assumed,
   };
-  let counted = countRoles(inputs, options);
+  const given = countRoles(inputs, options);
+  let counted = given;
   if (roles && counted !== roleNotKnown && !counted.roles.some((role) => roles.has(role))) {
     gathering.assumed.push(
       counted.isStated
@@ -136,8 +118,12 @@ function askTable(
       'Whose paper it is, in which role, is not known: every possible role was counted.',
     );
   }
-  if (askRules(own, kinds, counted, retentionCase, scene, gathering)) return;
-  askRules(common, kinds, counted, retentionCase, scene, gathering);
+  if (!askRules(plan.own, kinds, counted, retentionCase, scene, gathering)) {
+    askRules(plan.common, kinds, counted, retentionCase, scene, gathering);
+  }
+  if (plan.additions.length > 0) {
+    askRules(plan.additions, kinds, given, retentionCase, scene, gathering);
+  }
 }
 
 const emptyOpen = (because: string): Verdict => ({

@@ -19,6 +19,13 @@ function assumptionFor(name: InputName): string {
   );
 }
 
+/** What the case says of a flag: what was not used for tax was not deducted and is no work expense either. */
+function findAnswer(inputs: CaseInputs, name: InputName): unknown {
+  const value = inputs[name];
+  if (value !== undefined || (name !== 'deducted' && name !== 'workExpense')) return value;
+  return inputs.usedForTax;
+}
+
 /** The answer to a condition: no, yes, or yes because an unknown was counted so. */
 type Answer = 'no' | 'yes' | 'assumed';
 
@@ -57,10 +64,11 @@ const unlikelyNotes: Partial<Record<InputName, string>> = {
 };
 
 function meetsKind(
-  kind: string | null | undefined,
+  given: string | null | undefined,
   known: ReadonlySet<string>,
   condition: NonNullable<Rule['documentKind']>,
 ): Answer {
+  const kind = given?.toLowerCase();
   // A kind that no rule of the class names is at least none of the excepted ones; otherwise it tells nothing.
   if (!kind || (condition.only && !known.has(kind))) return condition.orUnknown ? 'assumed' : 'no';
   const isMet = condition.only ? condition.only.includes(kind) : !condition.except?.includes(kind);
@@ -144,13 +152,13 @@ export function appliesTo(
       const key = name as InputName;
       const condition = rule.when[key];
       if (!condition) continue;
-      let answer = meetsCondition(inputs[key], condition);
+      const value = findAnswer(inputs, key);
+      let answer = meetsCondition(value, condition);
       if (answer === 'no' && condition === 'yes' && key === 'usedForTax' && counted.isAny) {
-        if (inputs.usedForTax === undefined) answer = 'assumed';
+        if (value === undefined) answer = 'assumed';
       }
       if (answer === 'no') {
-        const note =
-          condition === 'yes' && inputs[key] === undefined ? unlikelyNotes[key] : undefined;
+        const note = condition === 'yes' && value === undefined ? unlikelyNotes[key] : undefined;
         if (note) assumed.push(note);
         return false;
       }

@@ -48,7 +48,6 @@ function describePeriod(keep: PeriodKeep): string {
   const yearEnd = {
     trigger: '',
     'end-of-calendar-year': 'the end of the year of ',
-    'end-of-council-year': 'the 31 March that ends the council-tax year of ',
     'end-of-month': 'the end of the month of ',
   }[keep.startAt];
   const child = keep.notBeforeAge

@@ -7,6 +7,7 @@ import { ownerInputsSchema } from '../contract/cases.ts';
 import type { IsoDate } from '../contract/dates.ts';
 import {
   addMonths,
+  addYears,
   endOfMonth,
   endOfYearEnding,
   findLatest,
@@ -83,6 +84,8 @@ const derivedMoments = [
   'irishTransactionYear',
   'nextPayPeriod',
   'employmentTaxDue',
+  'companyYear',
+  'councilYear',
 ] as const;
 export type DerivedMoment = (typeof derivedMoments)[number];
 export const momentNames = [...dayInputs, ...derivedMoments] as const;
@@ -155,6 +158,8 @@ const labels: Record<Moment, string> = {
   irishTransactionYear: 'the end of the tax year of the transaction',
   nextPayPeriod: 'the end of the pay reference period after it',
   employmentTaxDue: 'the day the tax was due',
+  companyYear: 'the end of the financial year',
+  councilYear: 'the end of the council-tax year',
 };
 
 /** What a moment is called in a sentence. */
@@ -220,7 +225,10 @@ const notEvents = new Set<Moment>([
   'nextPayReferencePeriodEnd',
 ]);
 
-/** A paper used for a disposal counts from the year of the disposal, never from an earlier one. */
+/**
+ * A paper used for a disposal, or for a transaction over several years, counts from the year of the disposal or
+ * of the completion, never from an earlier one.
+ */
 function resolveYear(
   moment: Moment,
   inputs: CaseInputs,
@@ -228,7 +236,7 @@ function resolveYear(
   endOf: (day: IsoDate) => IsoDate,
   waitsFor: DayInput | null,
 ): ResolvedMoment {
-  const event = waitsFor ? inputs[waitsFor] : null;
+  const event = findLatest([waitsFor ? inputs[waitsFor] : null, inputs.transactionCompletedOn]);
   if (event) {
     const ofEvent = endOf(event);
     if (given) return found(moment, laterOf(given, ofEvent));
@@ -248,6 +256,50 @@ function resolveYear(
 const endOfGbTaxYear = (day: IsoDate): IsoDate => endOfYearEnding(day, '04-05');
 const endOfAuIncomeYear = (day: IsoDate): IsoDate => endOfYearEnding(day, '06-30');
 const endOfYear = (day: IsoDate): IsoDate => endOfYearEnding(day, '12-31');
+
+/** The company year given, moved on in whole years until it holds a later disposal or completion. */
+function resolveCompanyYear(inputs: CaseInputs, waitsFor: DayInput | null): ResolvedMoment {
+  const given = inputs.financialYearEnd;
+  if (!given) return missing('companyYear');
+  const event = findLatest([waitsFor ? inputs[waitsFor] : null, inputs.transactionCompletedOn]);
+  if (!event || event <= given) return found('companyYear', given);
+  let end = given;
+  for (let years = 1; end < event && years <= 600; years += 1) {
+    const moved = addYears(given, years);
+    end = isEndOfMonth(given) ? endOfMonth(moved) : moved;
+  }
+  return found(
+    'companyYear',
+    end,
+    `${wordDay(event)} falls in the year that ends on ${wordDay(end)}.`,
+  );
+}
+
+/**
+ * Bills of a council-tax year are sent out in the weeks before it starts, so one dated in February or March
+ * belongs to the year that follows; one dated 31 March is the year's own last day.
+ */
+function endOfCouncilYear(day: IsoDate): IsoDate {
+  const monthDay = day.slice(5);
+  const isAhead = monthDay >= '02-01' && monthDay <= '03-30';
+  return endOfYearEnding(isAhead ? `${day.slice(0, 4)}-04-01` : day, '03-31');
+}
+
+/** The council-tax year: the period on the bill when it is given, else the year of its date. */
+function resolveCouncilYear(inputs: CaseInputs): ResolvedMoment {
+  const { taxYearEnd } = inputs;
+  // The tax year that ends on 5 April is the council-tax year that ended five days before.
+  const sameYear = taxYearEnd ? `${taxYearEnd.slice(0, 4)}-03-31` : null;
+  const stated = findLatest([inputs.financialYearEnd, inputs.endedOn, sameYear]);
+  if (stated) {
+    const end = endOfYearEnding(stated, '03-31');
+    return found('councilYear', end);
+  }
+  const day = findPaperDate(inputs);
+  if (!day) return missing('councilYear');
+  const end = endOfCouncilYear(day);
+  return found('councilYear', end, `A bill of ${wordDay(day)} is for the year to ${wordDay(end)}.`);
+}
 
 /** The end of the pay reference period after the recorded one; it is never longer than a month. */
 function resolveNextPayPeriod(inputs: CaseInputs): ResolvedMoment {
@@ -309,6 +361,10 @@ export function resolveMoment(
     }
     case 'nextPayPeriod':
       return resolveNextPayPeriod(inputs);
+    case 'companyYear':
+      return resolveCompanyYear(inputs, waitsFor);
+    case 'councilYear':
+      return resolveCouncilYear(inputs);
     case 'employmentTaxDue':
       return resolveEmploymentTaxDue(inputs);
     default: {

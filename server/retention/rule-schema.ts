@@ -120,9 +120,7 @@ const triggerShape = {
 const periodKeepSchema = z.strictObject({
   how: z.literal('period'),
   ...triggerShape,
-  startAt: z
-    .enum(['trigger', 'end-of-calendar-year', 'end-of-council-year', 'end-of-month'])
-    .default('trigger'),
+  startAt: z.enum(['trigger', 'end-of-calendar-year', 'end-of-month']).default('trigger'),
   /** `beginning-with` counts the first day itself. */
   counting: z.enum(['after', 'beginning-with']).default('after'),
   period: lengthSchema,
@@ -250,6 +248,11 @@ export const ruleSchema = z.strictObject({
   documentKind: kindConditionSchema.optional(),
   recordKind: kindConditionSchema.optional(),
   when: z.partialRecord(inputNameSchema, z.enum(conditionValues)).optional(),
+  /**
+   * An addition (a practice's own rule) is asked beside all others and takes none's place: it can only make the
+   * time longer.
+   */
+  addition: z.boolean().default(false),
   keep: keepSchema,
   disposal: z.enum(disposals).optional(),
   original: z.enum(originals).default('scan-is-enough'),

@@ -51,10 +51,12 @@ function listStops(inputs: CaseInputs, assumed: string[]): Stop[] {
         'Whether the decision could be appealed further is not known: counted as final.',
       );
     }
+    // A further appeal whose last day is said not to have come can still be made.
+    const isFinal = resolvedOn && furtherAppealExpiresOn !== null;
     stops.push({
       reason: 'An objection or appeal is running.',
       from: null,
-      to: resolvedOn ?? null,
+      to: isFinal ? resolvedOn : null,
       endText: 'Objection or appeal resolved',
     });
   }

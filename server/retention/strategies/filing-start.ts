@@ -62,9 +62,12 @@ export function findFilingDue(
   trigger: FoundTrigger | Outcome,
   scene: Scene,
 ): IsoDate | null {
-  const given = scene.inputs[keep.dueInput];
+  const { inputs } = scene;
+  const given = inputs[keep.dueInput] ?? inputs.nominalDueOn;
   if (given) return given;
-  return isFound(trigger) ? findNominalDue(keep.due, trigger.day) : null;
+  if (isFound(trigger)) return findNominalDue(keep.due, trigger.day);
+  // A moved due day is never earlier than the one in the statute.
+  return inputs.dueOn ?? null;
 }
 
 /** Evaluates the rule; the trigger is the end of the year, which the due day may stand in for. */

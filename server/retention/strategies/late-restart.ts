@@ -1,6 +1,13 @@
 /** Canada, Ireland: a period from the end of the year, counted again from the delivery of a late return. */
 import type { IsoDate } from '../../contract/dates.ts';
-import { addPeriod, endOfCalendarYear, laterOf, wordDay, wordPeriod } from '../dates.ts';
+import {
+  addPeriod,
+  endOfCalendarYear,
+  findLatest,
+  laterOf,
+  wordDay,
+  wordPeriod,
+} from '../dates.ts';
 import type { Outcome, Scene } from '../outcome.ts';
 import { addStep, openBecause, openUntilAnswered } from '../outcome.ts';
 import { periodOf } from '../rule-set.ts';
@@ -24,7 +31,7 @@ export function keepForLateRestart(
   const start = keep.startAt === 'trigger' ? trigger.day : endOfCalendarYear(trigger.day);
   let until = addPeriod(start, period);
   addStep(scene, `${wordPeriod(period)} after ${wordDay(start)}: ${wordDay(until)}.`, until);
-  const corrected = inputs.amendedReturnReceivedOn;
+  const corrected = findLatest([inputs.amendedReturnReceivedOn, inputs.amendedOn]);
   if (keep.correctionRestarts && corrected) {
     const restarted = restartFrom(keep, corrected);
     addStep(

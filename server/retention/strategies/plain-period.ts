@@ -6,7 +6,6 @@ import {
   birthdayAt,
   endOfCalendarYear,
   endOfMonth,
-  endOfYearEnding,
   wordDay,
   wordPeriod,
 } from '../dates.ts';
@@ -17,16 +16,6 @@ import { periodOf, requireLimitation } from '../rule-set.ts';
 import type { PeriodKeep } from '../rule-schema.ts';
 import type { FoundTrigger } from '../triggers.ts';
 
-/**
- * Bills of a council-tax year are sent out in the weeks before it starts, so one dated in February or March
- * belongs to the year that follows; one dated 31 March is the year's own last day.
- */
-function endOfCouncilYear(day: IsoDate): IsoDate {
-  const monthDay = day.slice(5);
-  const isAhead = monthDay >= '02-01' && monthDay <= '03-30';
-  return endOfYearEnding(isAhead ? `${day.slice(0, 4)}-04-01` : day, '03-31');
-}
-
 function alignStart(keep: PeriodKeep, day: IsoDate, fromYearEnd: boolean): IsoDate {
   if (fromYearEnd) return endOfCalendarYear(day);
   switch (keep.startAt) {
@@ -34,8 +23,6 @@ function alignStart(keep: PeriodKeep, day: IsoDate, fromYearEnd: boolean): IsoDa
       return day;
     case 'end-of-calendar-year':
       return endOfCalendarYear(day);
-    case 'end-of-council-year':
-      return endOfCouncilYear(day);
     case 'end-of-month':
       return endOfMonth(day);
   }

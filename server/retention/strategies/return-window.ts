@@ -7,6 +7,7 @@ import type { IsoDate } from '../../contract/dates.ts';
 import {
   addPeriod,
   addYears,
+  findLatest,
   laterOf,
   nextFollowing,
   nextFollowingOf,
@@ -89,7 +90,8 @@ export function keepForReturnWindow(
   trigger: FoundTrigger,
   scene: Scene,
 ): Outcome {
-  const { filedOn, amendedOn, noticeToFileOn } = scene.inputs;
+  const { filedOn, noticeToFileOn } = scene.inputs;
+  const amendedOn = findLatest([scene.inputs.amendedOn, scene.inputs.amendedReturnReceivedOn]);
   let until = findBase(keep, trigger.day, scene);
   if (amendedOn) {
     const quarterDay = findQuarterDay(keep, amendedOn);
