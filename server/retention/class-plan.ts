@@ -35,11 +35,11 @@ const plans = new WeakMap<IndexedTable, WeakMap<IndexedTable, Map<ClassId, Class
 
 /** The plan of a class in a country, beside the common table of the same rule set. */
 export function findPlan(country: IndexedTable, common: IndexedTable, classId: ClassId): ClassPlan {
-  let byCommon = plans.get(country);
-  if (!byCommon) plans.set(country, (byCommon = new WeakMap()));
-  let byClass = byCommon.get(common);
-  if (!byClass) byCommon.set(common, (byClass = new Map()));
-  let plan = byClass.get(classId);
-  if (!plan) byClass.set(classId, (plan = buildPlan(country, common, classId)));
+  const byCommon = plans.get(country) ?? new WeakMap<IndexedTable, Map<ClassId, ClassPlan>>();
+  plans.set(country, byCommon);
+  const byClass = byCommon.get(common) ?? new Map<ClassId, ClassPlan>();
+  byCommon.set(common, byClass);
+  const plan = byClass.get(classId) ?? buildPlan(country, common, classId);
+  byClass.set(classId, plan);
   return plan;
 }

@@ -82,7 +82,8 @@ export function combineOutcomes(says: readonly { readonly outcome: Outcome }[]):
     );
     return { kind: 'open', until: null, from: null, because, provisional };
   }
-  if (latest !== null)
+  // What may go from the day it came never goes before it.
+  if (latest !== null && (from === null || from <= latest))
     return { kind: 'dated', until: latest, from: null, because: null, provisional: null };
   return { kind: 'none', until: null, from, because: null, provisional: null };
 }
