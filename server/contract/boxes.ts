@@ -98,4 +98,18 @@ export const boxEndpoints = {
     status: 200,
     mediaType: 'application/pdf',
   }),
+  getSeparatorSheet: defineEndpoint({
+    method: 'get',
+    path: '/api/households/:id/separator-sheet.pdf',
+    tag: 'boxes',
+    summary: 'Printable sheet to lay between papers; its code splits a pile',
+    access: 'box:read',
+    params: idParams,
+    query: z.object({
+      /** Absent: what printers of the household's country hold. */
+      paper: z.enum(['A4', 'Letter']).optional(),
+    }),
+    status: 200,
+    mediaType: 'application/pdf',
+  }),
 };

@@ -111,8 +111,9 @@ export const outflowSchema = z.object({
     z.object({ year: z.number().int(), sheets: z.number().int(), papers: z.number().int() }),
   ),
   permanent: z.number().int(),
-  /** Open (waiting for an event or an answer), held, or not yet looked at. */
+  /** Looked at and not settled: open (waiting for an event or an answer), held, or without a date. */
   open: z.number().int(),
+  /** Not yet looked at; counted here and nowhere else. */
   toReview: z.number().int(),
 });
 export type Outflow = z.infer<typeof outflowSchema>;

@@ -7,7 +7,7 @@ import { mountForHousehold } from './mount.ts';
 export function activityRoutes(_deps: Deps): Router {
   const router = Router();
   mountForHousehold(router, endpoints.listActivity, ({ access, query }) =>
-    listActivity(access.householdId, query),
+    listActivity(access, query),
   );
   return router;
 }

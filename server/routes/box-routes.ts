@@ -8,6 +8,7 @@ import {
   listAreas,
   listBoxes,
   printLabelOf,
+  printSeparatorOf,
 } from '../use-cases/boxes/boxes.ts';
 import type { Access } from './caller.ts';
 import { mountForHousehold } from './mount.ts';
@@ -25,14 +26,18 @@ export function boxRoutes(deps: Deps): Router {
     createArea(body.name, by(access), deps),
   );
   mountForHousehold(router, endpoints.listBoxes, ({ access, query }) =>
-    listBoxes(access.householdId, query),
+    listBoxes(access.householdId, access, query),
   );
   mountForHousehold(router, endpoints.createBox, ({ access, body }) =>
     createBox(body, by(access), deps),
   );
-  mountForHousehold(router, endpoints.getBox, ({ params }) => getBox(params.id));
-  mountForHousehold(router, endpoints.getBoxLabel, async ({ params, response }) => {
-    sendPdf(response, await printLabelOf(params.id, deps.config.publicUrl), 'box-label.pdf');
+  mountForHousehold(router, endpoints.getBox, ({ access, params }) => getBox(params.id, access));
+  mountForHousehold(router, endpoints.getBoxLabel, async ({ access, params, response }) => {
+    const bytes = await printLabelOf(params.id, access, deps.config.publicUrl);
+    sendPdf(response, bytes, 'box-label.pdf');
+  });
+  mountForHousehold(router, endpoints.getSeparatorSheet, async ({ access, query, response }) => {
+    sendPdf(response, await printSeparatorOf(access.householdId, query.paper), 'separator.pdf');
   });
   return router;
 }

@@ -13,20 +13,24 @@ import { mountForHousehold, mountForPractice, mountForSignedIn } from './mount.t
 export function householdRoutes(deps: Deps): Router {
   const router = Router();
   mountForSignedIn(router, endpoints.listHouseholds, ({ caller, query }) =>
-    listHouseholds(caller.memberships, query, deps.clock),
+    listHouseholds({ userId: caller.user.id, memberships: caller.memberships }, query, deps.clock),
   );
   mountForPractice(router, endpoints.createHousehold, ({ body, caller, membership }) =>
     createHousehold(body, { userId: caller.user.id, practiceId: membership.practiceId }, deps),
   );
   mountForHousehold(router, endpoints.getHousehold, ({ access }) =>
-    getHousehold(access.householdId, deps.clock),
+    getHousehold(
+      access.householdId,
+      { userId: access.user.id, seeReach: access.seeReach },
+      deps.clock,
+    ),
   );
   mountForHousehold(router, endpoints.updateHousehold, ({ access, version, body }) =>
     updateHousehold(
       access.householdId,
       version,
       body,
-      { userId: access.user.id, practiceId: access.practiceId },
+      { userId: access.user.id, practiceId: access.practiceId, seeReach: access.seeReach },
       deps,
     ),
   );

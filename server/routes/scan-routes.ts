@@ -33,8 +33,12 @@ export function scanRoutes(deps: Deps): Router {
       return { items };
     },
   );
-  mountForHousehold(router, endpoints.listScans, ({ params }) => listScans(params.id));
-  mountForHousehold(router, endpoints.retryScan, ({ params }) => retryScan(params.id, deps));
+  mountForHousehold(router, endpoints.listScans, ({ access, params }) =>
+    listScans(params.id, access),
+  );
+  mountForHousehold(router, endpoints.retryScan, ({ access, params }) =>
+    retryScan(params.id, access, deps),
+  );
 
   const sendPicture =
     (kind: 'image' | 'thumbnail') =>

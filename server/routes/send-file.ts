@@ -8,3 +8,12 @@ export function sendPdf(response: Response, bytes: Uint8Array, name: string): vo
     .set('Content-Disposition', `inline; filename="${name}"`)
     .send(Buffer.from(bytes));
 }
+
+/** A calendar (RFC 5545) for a program that subscribes to it or opens it once. */
+export function sendCalendar(response: Response, text: string): void {
+  response
+    .status(200)
+    .set('Content-Type', 'text/calendar; charset=utf-8')
+    .set('Content-Disposition', 'inline; filename="papers.ics"')
+    .send(text);
+}

@@ -25,7 +25,6 @@ export class HouseholdModel extends Model<
   declare businessNames: CreationOptional<string[]>;
   declare hopes: CreationOptional<string>;
   declare leadDays: CreationOptional<Record<string, number>>;
-  declare calendarTokenHash: CreationOptional<string | null>;
   declare nextBoxNumber: CreationOptional<number>;
   declare nextPaperNumber: CreationOptional<number>;
   declare nextListNumber: CreationOptional<number>;
@@ -49,7 +48,6 @@ export function initHouseholdModel(sequelize: Sequelize): void {
       businessNames: { type: DataTypes.JSONB },
       hopes: { type: DataTypes.TEXT },
       leadDays: { type: DataTypes.JSONB },
-      calendarTokenHash: { type: DataTypes.TEXT },
       nextBoxNumber: { type: DataTypes.INTEGER },
       nextPaperNumber: { type: DataTypes.INTEGER },
       nextListNumber: { type: DataTypes.INTEGER },

@@ -2,6 +2,7 @@
 import { QueryTypes, type Transaction } from 'sequelize';
 import { AreaModel } from '../models/area-model.ts';
 import { BoxModel, type BoxRow } from '../models/box-model.ts';
+import type { Visibility } from './register-repository.ts';
 
 export interface CountedBox extends BoxRow {
   householdName: string;
@@ -14,6 +15,9 @@ export interface CountedBox extends BoxRow {
   toReview: number;
 }
 
+/** Counts tell of nothing that the viewer may not see. */
+const visiblePaper = `($groups::text[] is null or p.class_group = any($groups::text[]))
+  and (p.eyes_only_user_id is null or p.eyes_only_user_id = $viewer)`;
 const countedBoxes = `
   select b.id, b.household_id as "householdId", b.area_id as "areaId", b.code, b.label, b.version,
     b.created_at as "createdAt", h.name as "householdName", a.name as "areaName",
@@ -21,8 +25,9 @@ const countedBoxes = `
     (select count(*)::int from scans s where s.box_id = b.id and s.status in ('waiting', 'reading')) as reading,
     (select count(*)::int from scans s where s.box_id = b.id and s.status = 'failed') as failed,
     (select count(*)::int from pages g join scans s on s.id = g.scan_id where s.box_id = b.id) as pages,
-    (select count(*)::int from papers p where p.box_id = b.id) as papers,
-    (select count(*)::int from papers p where p.box_id = b.id and p.status = 'to-review') as "toReview"
+    (select count(*)::int from papers p where p.box_id = b.id and ${visiblePaper}) as papers,
+    (select count(*)::int from papers p where p.box_id = b.id and p.status = 'to-review'
+      and ${visiblePaper}) as "toReview"
   from boxes b join households h on h.id = b.household_id left join areas a on a.id = b.area_id`;
 
 function requireSequelize() {
@@ -31,9 +36,9 @@ function requireSequelize() {
   return sequelize;
 }
 
-export async function findBox(id: string): Promise<CountedBox | null> {
+export async function findBox(id: string, visible: Visibility): Promise<CountedBox | null> {
   const rows = await requireSequelize().query<CountedBox>(`${countedBoxes} where b.id = $id`, {
-    bind: { id },
+    bind: { id, groups: visible.groups, viewer: visible.userId },
     type: QueryTypes.SELECT,
   });
   return rows[0] ?? null;
@@ -41,13 +46,20 @@ export async function findBox(id: string): Promise<CountedBox | null> {
 
 export async function listBoxes(
   householdId: string,
+  visible: Visibility,
   page: { offset: number; limit: number; descending: boolean },
 ): Promise<{ rows: CountedBox[]; total: number }> {
   const rows = await requireSequelize().query<CountedBox>(
     `${countedBoxes} where b.household_id = $householdId
      order by b.created_at ${page.descending ? 'desc' : 'asc'}, b.code offset $offset limit $limit`,
     {
-      bind: { householdId, offset: page.offset, limit: page.limit },
+      bind: {
+        householdId,
+        groups: visible.groups,
+        viewer: visible.userId,
+        offset: page.offset,
+        limit: page.limit,
+      },
       type: QueryTypes.SELECT,
     },
   );

@@ -2,6 +2,8 @@
 import { Op, type Transaction } from 'sequelize';
 import { EventModel, type EventRow } from '../models/event-model.ts';
 import { UserModel } from '../models/user-model.ts';
+import type { Visibility } from './register-repository.ts';
+import { selectRows } from './sql.ts';
 
 export interface NewEvent {
   practiceId: string;
@@ -24,25 +26,46 @@ export async function appendEvents(events: NewEvent[], transaction: Transaction)
   await EventModel.bulkCreate(events, { transaction });
 }
 
-/** Newest first, with the names of those who acted. */
+/**
+ * Newest first, with the names of those who acted. What concerns a paper that the viewer may not see is
+ * left out; somebody who sees some kinds of paper only is told nothing of subjects either.
+ */
 export async function listEvents(
   householdId: string,
+  visible: Visibility,
   page: { offset: number; limit: number },
-): Promise<{ rows: (EventRow & { byName: string })[]; total: number }> {
-  const { rows, count } = await EventModel.findAndCountAll({
-    where: { householdId },
-    order: [['id', 'DESC']],
-    ...page,
-  });
-  const names = await namesOf(rows.map((row) => row.userId));
-  return {
-    rows: rows.map((row) => ({
-      ...row.get({ plain: true }),
-      byName: row.userId ? (names.get(row.userId) ?? 'Somebody') : 'Slackwater',
-    })),
-    total: count,
-  };
+): Promise<{ rows: ListedEvent[]; total: number }> {
+  const bind = { householdId, groups: visible.groups, viewer: visible.userId };
+  const [rows, counted] = await Promise.all([
+    selectRows<ListedEvent>(
+      `select e.id::text as id, e.at, e.action, e.sentence, e.paper_id as "paperId",
+         e.shred_list_id as "shredListId",
+         case when e.user_id is null then 'Slackwater' else coalesce(u.name, 'Somebody') end as "byName"
+       from events e left join users u on u.id = e.user_id
+       where ${visibleEvents} order by e.id desc offset $offset limit $limit`,
+      { ...bind, ...page },
+    ),
+    selectRows<{ total: number }>(
+      `select count(*)::int as total from events e where ${visibleEvents}`,
+      bind,
+    ),
+  ]);
+  return { rows, total: counted[0]?.total ?? 0 };
 }
+
+export type ListedEvent = Pick<
+  EventRow,
+  'id' | 'at' | 'action' | 'sentence' | 'paperId' | 'shredListId'
+> & { byName: string };
+
+const visibleEvents = `e.household_id = $householdId
+  and ($groups::text[] is null or e.action not like 'subject.%')
+  and (e.paper_id is null or case when $groups::text[] is null
+    then not exists (select 1 from papers p where p.id = e.paper_id
+      and p.eyes_only_user_id <> $viewer)
+    else exists (select 1 from papers p where p.id = e.paper_id
+      and p.class_group = any($groups::text[])
+      and (p.eyes_only_user_id is null or p.eyes_only_user_id = $viewer)) end)`;
 
 /** Names of users by id. */
 export async function namesOf(ids: (string | null)[]): Promise<Map<string, string>> {

@@ -115,17 +115,6 @@ export async function takeNumbers(
   return household[kind];
 }
 
-export async function setCalendarTokenHash(
-  householdId: string,
-  hash: string,
-  transaction: Transaction,
-): Promise<void> {
-  await HouseholdModel.update(
-    { calendarTokenHash: hash },
-    { where: { id: householdId }, transaction },
-  );
-}
-
 export async function findPracticeName(id: string): Promise<string> {
   const practice = await PracticeModel.findByPk(id);
   return practice?.name ?? '';
@@ -143,21 +132,36 @@ export interface HouseholdCounts {
   boxes: number;
 }
 
-/** Papers by state, scans still to be read, holds in force and boxes. */
-export async function countForHouseholds(ids: string[]): Promise<Map<string, HouseholdCounts>> {
-  if (ids.length === 0) return new Map();
+/** Whose counts are asked for, and how far that person sees in each household (null: everything). */
+export interface CountScope {
+  userId: string;
+  households: { id: string; groups: string[] | null }[];
+}
+
+/** Papers by state, scans still to be read, holds in force and boxes, as far as somebody may know. */
+export async function countForHouseholds(scope: CountScope): Promise<Map<string, HouseholdCounts>> {
+  if (scope.households.length === 0) return new Map();
   const rows = await requireSequelize().query<HouseholdCounts>(
-    `select h.id as "householdId",
-       (select count(*)::int from papers p where p.household_id = h.id and p.status = 'to-review') as "toReview",
-       (select count(*)::int from papers p where p.household_id = h.id and p.status = 'undecided') as undecided,
-       (select count(*)::int from papers p where p.household_id = h.id and p.status = 'kept') as kept,
-       (select count(*)::int from papers p where p.household_id = h.id and p.status = 'leaving') as leaving,
-       (select count(*)::int from papers p where p.household_id = h.id and p.status = 'left') as "left",
+    `with asked as (select * from jsonb_to_recordset($households::jsonb) as h(id uuid, groups text[])),
+       seen as (
+         select p.id, p.household_id, p.status from papers p join asked h on h.id = p.household_id
+         where (h.groups is null or p.class_group = any(h.groups))
+           and (p.eyes_only_user_id is null or p.eyes_only_user_id = $userId))
+     select h.id as "householdId",
+       (select count(*)::int from seen p where p.household_id = h.id and p.status = 'to-review') as "toReview",
+       (select count(*)::int from seen p where p.household_id = h.id and p.status = 'undecided') as undecided,
+       (select count(*)::int from seen p where p.household_id = h.id and p.status = 'kept') as kept,
+       (select count(*)::int from seen p where p.household_id = h.id and p.status = 'leaving') as leaving,
+       (select count(*)::int from seen p where p.household_id = h.id and p.status = 'left') as "left",
        (select count(*)::int from scans s where s.household_id = h.id and s.status in ('waiting', 'reading')) as reading,
-       (select count(*)::int from holds o where o.household_id = h.id and o.lifted_on is null) as holds,
+       (select count(*)::int from holds o where o.household_id = h.id and o.lifted_on is null
+         and (o.paper_id is null or o.paper_id in (select id from seen))) as holds,
        (select count(*)::int from boxes b where b.household_id = h.id) as boxes
-     from households h where h.id = any($ids::uuid[])`,
-    { bind: { ids }, type: QueryTypes.SELECT },
+     from asked h`,
+    {
+      bind: { households: JSON.stringify(scope.households), userId: scope.userId },
+      type: QueryTypes.SELECT,
+    },
   );
   return new Map(rows.map((row) => [row.householdId, row]));
 }

@@ -1,7 +1,10 @@
 /** Messages and reminders on record. */
 import { Op, QueryTypes, type Transaction } from 'sequelize';
+import type { ClassId } from '../../contract/document-classes.ts';
+import type { PaperStatus } from '../../contract/papers.ts';
 import { MailModel, type MailRow } from '../models/mail-model.ts';
 import { ReminderModel, type ReminderRow } from '../models/reminder-model.ts';
+import type { Visibility } from './register-repository.ts';
 
 export async function insertMail(
   values: Pick<MailRow, 'practiceId' | 'userId' | 'address' | 'subject' | 'text' | 'html'>,
@@ -103,22 +106,39 @@ export interface SentReminder {
   kind: ReminderRow['kind'];
   on: string;
   about: string;
-  paperId: string | null;
+  paperId: string;
+  paperNumber: number;
+  paperStatus: PaperStatus;
+  class: ClassId;
   personName: string;
   state: MailRow['state'] | null;
   sentAt: Date | null;
   lastError: string | null;
 }
 
-/** Reminders of a household that were taken up, newest first, with the state of their message. */
-export async function listTakenReminders(householdId: string): Promise<SentReminder[]> {
+/**
+ * Reminders of a household that were taken up, newest first, with the state of their message; of papers
+ * that the viewer may see.
+ */
+export async function listTakenReminders(
+  householdId: string,
+  visible: Visibility,
+): Promise<SentReminder[]> {
   const { sequelize } = ReminderModel;
   if (!sequelize) throw new Error('No database is connected.');
   return sequelize.query<SentReminder>(
     `select r.key, r.kind, r."on"::text as "on", r.about::text as about, r.paper_id as "paperId",
+       p.number as "paperNumber", p.status as "paperStatus", p.class,
        u.name as "personName", m.state, m.sent_at as "sentAt", m.last_error as "lastError"
-     from reminders r join users u on u.id = r.user_id left join mails m on m.id = r.mail_id
-     where r.household_id = $householdId order by r.created_at desc, r.key limit 500`,
-    { bind: { householdId }, type: QueryTypes.SELECT },
+     from reminders r join users u on u.id = r.user_id join papers p on p.id = r.paper_id
+       left join mails m on m.id = r.mail_id
+     where r.household_id = $householdId
+       and ($groups::text[] is null or p.class_group = any($groups::text[]))
+       and (p.eyes_only_user_id is null or p.eyes_only_user_id = $viewer)
+     order by r.created_at desc, r.key limit 500`,
+    {
+      bind: { householdId, groups: visible.groups, viewer: visible.userId },
+      type: QueryTypes.SELECT,
+    },
   );
 }

@@ -1,6 +1,7 @@
 /** Scans and how far their reading got. */
 import { Op, QueryTypes, type Transaction } from 'sequelize';
 import { ScanModel, type ScanRow } from '../models/scan-model.ts';
+import type { Visibility } from './register-repository.ts';
 
 export interface CountedScan extends ScanRow {
   pagesRead: number;
@@ -14,25 +15,37 @@ function requireSequelize() {
   return sequelize;
 }
 
+const visiblePaper = `($groups::text[] is null or p.class_group = any($groups::text[]))
+  and (p.eyes_only_user_id is null or p.eyes_only_user_id = $viewer)`;
+
 const countedScans = `
   select s.id, s.household_id as "householdId", s.box_id as "boxId", s.name, s.media_type as "mediaType",
     s.bytes, s.sha256, s.status, s.reason, s.page_count as "pageCount", s.attempts,
     s.created_by as "createdBy", s.created_at as "createdAt", s.read_at as "readAt",
     (select count(*)::int from pages g where g.scan_id = s.id) as "pagesRead",
     (select count(*)::int from pages g where g.scan_id = s.id and g.blank) as "blankPages",
-    (select count(*)::int from papers p where p.scan_id = s.id) as papers
-  from scans s`;
+    (select count(*)::int from papers p where p.scan_id = s.id and ${visiblePaper}) as papers
+  from scans s
+  where ($groups::text[] is null or s.created_by = $viewer
+    or exists (select 1 from papers p where p.scan_id = s.id and ${visiblePaper}))`;
 
-export async function listScansOfBox(boxId: string): Promise<CountedScan[]> {
+/** Scans of a box; who sees some kinds of paper only learns of scans with such papers, and of their own. */
+export async function listScansOfBox(boxId: string, visible: Visibility): Promise<CountedScan[]> {
   return requireSequelize().query<CountedScan>(
-    `${countedScans} where s.box_id = $boxId order by s.created_at desc, s.name`,
-    { bind: { boxId }, type: QueryTypes.SELECT },
+    `${countedScans} and s.box_id = $boxId order by s.created_at desc, s.name`,
+    {
+      bind: { boxId, groups: visible.groups, viewer: visible.userId },
+      type: QueryTypes.SELECT,
+    },
   );
 }
 
-export async function findCountedScan(id: string): Promise<CountedScan | null> {
-  const rows = await requireSequelize().query<CountedScan>(`${countedScans} where s.id = $id`, {
-    bind: { id },
+export async function findCountedScan(
+  id: string,
+  visible: Visibility,
+): Promise<CountedScan | null> {
+  const rows = await requireSequelize().query<CountedScan>(`${countedScans} and s.id = $id`, {
+    bind: { id, groups: visible.groups, viewer: visible.userId },
     type: QueryTypes.SELECT,
   });
   return rows[0] ?? null;

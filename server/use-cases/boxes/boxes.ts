@@ -21,7 +21,9 @@ import { inTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { InvalidInputError, NotFoundError } from '../../errors.ts';
 import { printBoxLabel } from '../../print/box-label.ts';
-import { choosePaper } from '../../print/paper-sizes.ts';
+import { choosePaper, type PaperName } from '../../print/paper-sizes.ts';
+import { printSeparatorSheet } from '../../print/separator-sheet.ts';
+import { type Actor, visibilityOf } from '../papers/actor.ts';
 
 interface By {
   userId: string;
@@ -29,23 +31,27 @@ interface By {
   householdId: string;
 }
 
+/** Who looks, and how far that person sees: the papers that are counted. */
+export type BoxViewer = Pick<Actor, 'user' | 'seeReach'>;
+
 export async function listAreas(householdId: string) {
   const items = await listAreaRows(householdId);
   return { items, total: items.length };
 }
 
 /** @throws NotFoundError */
-export async function getBox(id: string): Promise<BoxRecord> {
-  const box = await findBox(id);
+export async function getBox(id: string, viewer: BoxViewer): Promise<BoxRecord> {
+  const box = await findBox(id, visibilityOf(viewer));
   if (!box) throw new NotFoundError();
   return viewBox(box);
 }
 
 export async function listBoxes(
   householdId: string,
+  viewer: BoxViewer,
   page: { page: number; pageSize: number; sort?: string | undefined },
 ): Promise<{ items: BoxRecord[]; total: number }> {
-  const { rows, total } = await listBoxRows(householdId, {
+  const { rows, total } = await listBoxRows(householdId, visibilityOf(viewer), {
     offset: (page.page - 1) * page.pageSize,
     limit: page.pageSize,
     descending: page.sort?.startsWith('-') ?? false,
@@ -77,7 +83,7 @@ export async function createBox(
     );
     return boxId;
   });
-  return getBox(id);
+  return getBox(id, { user: { id: by.userId, name: '' }, seeReach: 'all' });
 }
 
 export async function createArea(name: string, by: By, { clock }: Pick<Deps, 'clock'>) {
@@ -97,8 +103,12 @@ export async function createArea(name: string, by: By, { clock }: Pick<Deps, 'cl
 }
 
 /** The label of a box as a PDF; its QR code opens the box on a phone. */
-export async function printLabelOf(boxId: string, publicUrl: string): Promise<Uint8Array> {
-  const box = await getBox(boxId);
+export async function printLabelOf(
+  boxId: string,
+  viewer: BoxViewer,
+  publicUrl: string,
+): Promise<Uint8Array> {
+  const box = await getBox(boxId, viewer);
   const household = await findHousehold(box.householdId);
   if (!household) throw new NotFoundError();
   return printBoxLabel({
@@ -110,6 +120,16 @@ export async function printLabelOf(boxId: string, publicUrl: string): Promise<Ui
     url: `${publicUrl}/boxes/${box.id}`,
     paper: choosePaper(household.country),
   });
+}
+
+/** A sheet to lay between papers; on the paper that printers of the household's country hold, or as asked. */
+export async function printSeparatorOf(
+  householdId: string,
+  paper: PaperName | undefined,
+): Promise<Uint8Array> {
+  const household = await findHousehold(householdId);
+  if (!household) throw new NotFoundError();
+  return printSeparatorSheet({ paper: paper ?? choosePaper(household.country) });
 }
 
 function viewBox(box: CountedBox): BoxRecord {

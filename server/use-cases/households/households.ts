@@ -6,7 +6,7 @@ import type {
   Household,
   updateHouseholdSchema,
 } from '../../contract/households.ts';
-import { type Membership, reaches, reachOf } from '../../contract/permissions.ts';
+import { type Membership, type Reach, reaches, reachOf } from '../../contract/permissions.ts';
 import { appendEvent } from '../../db/repositories/event-repository.ts';
 import {
   findHousehold,
@@ -20,11 +20,12 @@ import { InvalidInputError, NotFoundError, StaleVersionError } from '../../error
 import { findCaseProblems } from '../../retention/case-problems.ts';
 import type { RuleSet } from '../../retention/rule-set.ts';
 import { reassessHousehold } from '../assess-paper.ts';
-import { viewHouseholds } from './view-household.ts';
+import { groupsOf } from '../papers/actor.ts';
+import { type Viewer, viewHouseholds } from './view-household.ts';
 
 /** The households that somebody's memberships reach. */
 export async function listHouseholds(
-  memberships: Membership[],
+  { userId, memberships }: { userId: string; memberships: Membership[] },
   page: { page: number; pageSize: number; sort?: string | undefined },
   clock: Clock,
 ): Promise<{ items: Household[]; total: number }> {
@@ -36,13 +37,27 @@ export async function listHouseholds(
     limit: page.pageSize,
     descending: page.sort === '-name',
   });
-  return { items: await viewHouseholds(rows, clock), total };
+  const viewer: Viewer = {
+    userId,
+    groupsIn: ({ id, practiceId }) => {
+      const membership = readable.find(
+        (m) => m.practiceId === practiceId && (m.householdId === null || m.householdId === id),
+      );
+      return membership ? groupsOf(reachOf(membership, 'paper:read')) : [];
+    },
+  };
+  return { items: await viewHouseholds(rows, viewer, clock), total };
 }
 
 /** @throws NotFoundError */
-export async function getHousehold(id: string, clock: Clock): Promise<Household> {
+export async function getHousehold(
+  id: string,
+  by: { userId: string; seeReach: Reach },
+  clock: Clock,
+): Promise<Household> {
   const row = await findHousehold(id);
-  const [view] = row ? await viewHouseholds([row], clock) : [];
+  const viewer = { userId: by.userId, groupsIn: () => groupsOf(by.seeReach) };
+  const [view] = row ? await viewHouseholds([row], viewer, clock) : [];
   if (!view) throw new NotFoundError();
   return view;
 }
@@ -68,7 +83,7 @@ export async function createHousehold(
     );
     return made;
   });
-  return getHousehold(row.id, clock);
+  return getHousehold(row.id, { userId: by.userId, seeReach: 'all' }, clock);
 }
 
 /**
@@ -79,7 +94,7 @@ export async function updateHousehold(
   id: string,
   version: number,
   changes: z.infer<typeof updateHouseholdSchema>,
-  by: { userId: string; practiceId: string },
+  by: { userId: string; practiceId: string; seeReach: Reach },
   deps: Pick<Deps, 'clock' | 'ruleSet'>,
 ): Promise<Household> {
   const before = await findHousehold(id);
@@ -108,7 +123,7 @@ export async function updateHousehold(
     await reassessHousehold(id, { today, ruleSet: deps.ruleSet }, transaction);
     return true;
   });
-  const current = await getHousehold(id, deps.clock);
+  const current = await getHousehold(id, by, deps.clock);
   if (!isWritten) throw new StaleVersionError(current);
   return current;
 }

@@ -4,10 +4,24 @@ import { countForHouseholds } from '../../db/repositories/household-repository.t
 import { practiceNames } from '../../db/repositories/user-repository.ts';
 import type { HouseholdRow } from '../../db/models/household-model.ts';
 
+/** Who looks at a household: counts tell of nothing that this person may not see. */
+export interface Viewer {
+  userId: string;
+  /** The class groups that the viewer sees of a household; null stands for all. */
+  groupsIn(household: { id: string; practiceId: string }): string[] | null;
+}
+
 /** Households as the API shows them, with counts and today's date where they live. */
-export async function viewHouseholds(rows: HouseholdRow[], clock: Clock): Promise<Household[]> {
+export async function viewHouseholds(
+  rows: HouseholdRow[],
+  viewer: Viewer,
+  clock: Clock,
+): Promise<Household[]> {
   const [counts, practices] = await Promise.all([
-    countForHouseholds(rows.map((row) => row.id)),
+    countForHouseholds({
+      userId: viewer.userId,
+      households: rows.map((row) => ({ id: row.id, groups: viewer.groupsIn(row) })),
+    }),
     practiceNames([...new Set(rows.map((row) => row.practiceId))]),
   ]);
   return rows.map((row) => {

@@ -24,7 +24,8 @@ export function visibilityOf(
   return { groups: groupsOf(narrowest(actor.seeReach, reach)), userId: actor.user.id };
 }
 
-function groupsOf(reach: Reach): string[] | null {
+/** A reach as the database is asked for it: null stands for all groups. */
+export function groupsOf(reach: Reach): string[] | null {
   if (reach === 'all') return null;
   return reach === 'none' ? [] : reach;
 }

@@ -10,7 +10,7 @@ import { insertPaper } from '../../db/repositories/paper-repository.ts';
 import { inTransaction } from '../../db/transaction.ts';
 import { InvalidInputError, NotFoundError } from '../../errors.ts';
 import { assessPaper, loadAssessContext } from '../assess-paper.ts';
-import { type Actor, requireReach } from './actor.ts';
+import { type Actor, requireReach, visibilityOf } from './actor.ts';
 import { patchFacts } from './patch-facts.ts';
 import type { PaperDay } from './save-change.ts';
 import { getPaper } from './view-paper.ts';
@@ -21,8 +21,14 @@ export async function enterPaper(
   actor: Actor,
   day: PaperDay,
 ): Promise<Paper> {
-  requireReach(actor, requireClass(input.class).group, 'entering papers');
-  if (input.boxId && (await findBox(input.boxId))?.householdId !== actor.householdId) {
+  const { group } = requireClass(input.class);
+  requireReach(actor, group, 'entering papers');
+  // What one may not see cannot be shown after it was entered.
+  requireReach({ ...actor, reach: actor.seeReach }, group, 'entering papers');
+  if (
+    input.boxId &&
+    (await findBox(input.boxId, visibilityOf(actor)))?.householdId !== actor.householdId
+  ) {
     throw new InvalidInputError([
       { field: 'boxId', message: 'This box is not one of the household.' },
     ]);

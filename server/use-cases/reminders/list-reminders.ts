@@ -1,5 +1,4 @@
 import type { z } from 'zod';
-import type { Reach } from '../../contract/permissions.ts';
 import type { mailSchema, Reminder } from '../../contract/reminders.ts';
 import { listDatedPapers } from '../../db/repositories/dated-paper-repository.ts';
 import { findHousehold } from '../../db/repositories/household-repository.ts';
@@ -7,19 +6,20 @@ import { listMails, listTakenReminders } from '../../db/repositories/mail-reposi
 import type { Deps } from '../../deps.ts';
 import { NotFoundError } from '../../errors.ts';
 import { comingReminders } from '../../reminders/due-reminders.ts';
+import { type Actor, visibilityOf } from '../papers/actor.ts';
 
 /** What is coming within two years, soonest first, then what was sent, newest first. */
 export async function listReminders(
   householdId: string,
-  viewer: { userId: string; reach: Reach },
+  viewer: Pick<Actor, 'user' | 'reach' | 'seeReach'>,
   { clock }: Pick<Deps, 'clock'>,
 ): Promise<{ items: Reminder[]; total: number }> {
   const household = await findHousehold(householdId);
   if (!household) throw new NotFoundError();
   const papers = (await listDatedPapers(householdId)).filter(
-    (paper) => paper.eyesOnlyUserId === null || paper.eyesOnlyUserId === viewer.userId,
+    (paper) => paper.eyesOnlyUserId === null || paper.eyesOnlyUserId === viewer.user.id,
   );
-  const taken = await listTakenReminders(householdId);
+  const taken = await listTakenReminders(householdId, visibilityOf(viewer, viewer.reach));
   const takenKeys = new Set(taken.map((reminder) => reminder.key));
   const coming = comingReminders({
     papers,
@@ -27,26 +27,22 @@ export async function listReminders(
     today: clock.todayIn(household.timeZone),
     reach: viewer.reach,
   }).filter((reminder) => !takenKeys.has(reminder.key));
-  const byId = new Map(papers.map((paper) => [paper.id, paper]));
-  const sent = taken.flatMap((reminder): Reminder[] => {
-    const paper = reminder.paperId ? byId.get(reminder.paperId) : undefined;
-    // Papers outside the viewer's reach are not mentioned; those that left are, without details.
-    if (viewer.reach !== 'all' && !paper) return [];
-    return [
-      {
-        key: `${reminder.key}:${reminder.personName}`,
-        kind: reminder.kind,
-        state: reminder.state ?? 'queued',
-        on: reminder.on,
-        about: reminder.about,
-        paperId: paper?.id ?? null,
-        paperNumber: paper?.number ?? null,
-        class: paper?.class ?? null,
-        personName: reminder.personName,
-        sentAt: reminder.sentAt ? new Date(reminder.sentAt).toISOString() : null,
-        lastError: reminder.lastError,
-      },
-    ];
+  const sent = taken.map((reminder): Reminder => {
+    // Of a paper that left, its place in time is told, no detail.
+    const isHere = reminder.paperStatus !== 'left';
+    return {
+      key: `${reminder.key}:${reminder.personName}`,
+      kind: reminder.kind,
+      state: reminder.state ?? 'queued',
+      on: reminder.on,
+      about: reminder.about,
+      paperId: isHere ? reminder.paperId : null,
+      paperNumber: isHere ? reminder.paperNumber : null,
+      class: isHere ? reminder.class : null,
+      personName: reminder.personName,
+      sentAt: reminder.sentAt ? new Date(reminder.sentAt).toISOString() : null,
+      lastError: reminder.lastError,
+    };
   });
   const items = [...coming, ...sent];
   return { items, total: items.length };

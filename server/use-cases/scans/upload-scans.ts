@@ -17,6 +17,7 @@ import { ConflictError, InvalidInputError, NotFoundError } from '../../errors.ts
 import { queueNames } from '../../jobs/queue.ts';
 import { sniffFile } from '../../reading/pages/sniff.ts';
 import { readingLimitsOf } from '../../reading/pages/limits.ts';
+import { type Actor, visibilityOf } from '../papers/actor.ts';
 import { discardReceived, type ReceivedFile } from '../../storage/upload-receiver.ts';
 
 export interface UploadBy {
@@ -25,6 +26,9 @@ export interface UploadBy {
   householdId: string;
   boxId: string;
 }
+
+/** Who looks, and how far that person sees. */
+export type ScanViewer = Pick<Actor, 'user' | 'seeReach'>;
 
 type UploadDeps = Pick<Deps, 'clock' | 'config' | 'queue' | 'storage'>;
 
@@ -78,7 +82,8 @@ async function takeIn(file: ReceivedFile, by: UploadBy, deps: UploadDeps): Promi
 
   const known = await findScanByHash(by.householdId, file.sha256);
   const id = known?.id ?? (await storeNew(file, bytes, mediaTypes[sniffed.kind] ?? '', by, deps));
-  const scan = await findCountedScan(id);
+  // Whoever sends a file in may know how far it is, also when somebody else sent it before.
+  const scan = await findCountedScan(id, { groups: null, userId: by.userId });
   return {
     name: file.label,
     accepted: true,
@@ -136,12 +141,17 @@ async function storeNew(
   return winner.id;
 }
 
-export async function listScans(boxId: string): Promise<{ items: Scan[] }> {
-  return { items: (await listScansOfBox(boxId)).map(viewScan) };
+export async function listScans(boxId: string, viewer: ScanViewer): Promise<{ items: Scan[] }> {
+  return { items: (await listScansOfBox(boxId, visibilityOf(viewer))).map(viewScan) };
 }
 
 /** @throws ConflictError when the scan has not failed */
-export async function retryScan(scanId: string, { queue }: Pick<Deps, 'queue'>): Promise<Scan> {
+export async function retryScan(
+  scanId: string,
+  viewer: ScanViewer,
+  { queue }: Pick<Deps, 'queue'>,
+): Promise<Scan> {
+  if (!(await findCountedScan(scanId, visibilityOf(viewer)))) throw new NotFoundError();
   const isQueued = await inTransaction(async (transaction) => {
     if (!(await requeueScan(scanId, transaction))) return false;
     await queue.send(queueNames.readScan, { scanId }, { transaction });
@@ -152,7 +162,7 @@ export async function retryScan(scanId: string, { queue }: Pick<Deps, 'queue'>):
       'Only a scan that failed can be read again. Reload to see where it is.',
     );
   }
-  const scan = await findCountedScan(scanId);
+  const scan = await findCountedScan(scanId, visibilityOf(viewer));
   if (!scan) throw new NotFoundError();
   return viewScan(scan);
 }

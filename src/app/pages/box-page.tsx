@@ -65,6 +65,16 @@ export function Component() {
                 Enter without a scan
               </Button>
             ) : null}
+            {householdId ? (
+              <FileLink
+                href={buildApiUrl(boxEndpoints.getSeparatorSheet, { params: { id: householdId } })}
+                target="_blank"
+                rel="noreferrer"
+                icon={<Printer aria-hidden />}
+              >
+                Print a separator sheet
+              </FileLink>
+            ) : null}
             <FileLink
               href={buildApiUrl(boxEndpoints.getBoxLabel, { params: { id: boxId } })}
               target="_blank"

@@ -44,6 +44,9 @@ export function OutflowTable({ outflow }: { outflow: Outflow }) {
               <Line key={y.year} name={y.year} sheets={y.sheets} papers={y.papers} />
             ))}
           {outflow.open > 0 ? <Line name="Not settled yet" sheets={outflow.open} /> : null}
+          {outflow.toReview > 0 ? (
+            <Line name="Not looked at yet" sheets={outflow.toReview} />
+          ) : null}
           {outflow.permanent > 0 ? <Line name="Stays for good" sheets={outflow.permanent} /> : null}
         </tbody>
       </table>

@@ -14,7 +14,7 @@ export interface OutflowShape {
   total: number;
   /** Sheets that stay for good: the bed of the estuary. */
   bed: number;
-  /** Sheets whose time nobody knows yet. */
+  /** Sheets whose time nobody knows yet, those not looked at included. */
   unsettled: number;
   dueNow: number;
   steps: OutflowStep[];
@@ -35,6 +35,7 @@ function describeOutflow(outflow: Outflow, total: number): string {
     last ? `${countSheets(leaving)} may leave year by year until ${last.year}` : '',
     outflow.permanent > 0 ? `${countSheets(outflow.permanent)} stay for good` : '',
     outflow.open > 0 ? `for ${countSheets(outflow.open)} it is not settled yet` : '',
+    outflow.toReview > 0 ? `${countSheets(outflow.toReview)} wait to be looked at` : '',
   ].filter(Boolean);
   const tail = parts.length > 1 ? `${parts.slice(0, -1).join(', ')} and ${parts.at(-1)}` : parts[0];
   return `${countSheets(total)} in the house: ${tail}.`;
@@ -50,7 +51,8 @@ const fewestYears = 5;
 export function shapeOutflow(outflow: Outflow): OutflowShape {
   const byYear = new Map(outflow.years.map((y) => [y.year, y.sheets]));
   const leavingLater = outflow.years.reduce((sum, y) => sum + y.sheets, 0);
-  const total = outflow.dueNow + leavingLater + outflow.permanent + outflow.open;
+  const unsettled = outflow.open + outflow.toReview;
+  const total = outflow.dueNow + leavingLater + outflow.permanent + unsettled;
   const first = Number(outflow.today.slice(0, 4));
   const last = Math.max(first + fewestYears - 1, ...outflow.years.map((y) => y.year));
   const steps: OutflowStep[] = [];
@@ -63,7 +65,7 @@ export function shapeOutflow(outflow: Outflow): OutflowShape {
   return {
     total,
     bed: outflow.permanent,
-    unsettled: outflow.open,
+    unsettled,
     dueNow: outflow.dueNow,
     steps,
     sentence: describeOutflow(outflow, total),

@@ -1,21 +1,27 @@
-import { CalendarDays, Copy } from 'lucide-react';
+import { CalendarDays, CalendarOff, Copy } from 'lucide-react';
 import { toast } from 'sonner';
 import { Banner } from '../../../components/ui/banner.tsx';
 import { Button } from '../../../components/ui/button.tsx';
 import { Field } from '../../../components/ui/field.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
 import { sentenceOf } from '../../../lib/api-error.ts';
-import { useMakeCalendarAddress } from '../api/make-calendar-address.ts';
+import { useEndCalendarAddress, useMakeCalendarAddress } from '../api/make-calendar-address.ts';
 
 /** The secret address under which a calendar program finds the dates. Shown once, when it is made. */
 export function CalendarAddress({ householdId }: { householdId: string }) {
   const make = useMakeCalendarAddress(householdId);
+  const end = useEndCalendarAddress(householdId);
   const url = make.data?.url;
   return (
     <div className="space-y-4">
       {make.error ? (
         <Banner alert tone="fault" title="No address was made">
           {sentenceOf(make.error)}
+        </Banner>
+      ) : null}
+      {end.error ? (
+        <Banner alert tone="fault" title="The address was not ended">
+          {sentenceOf(end.error)}
         </Banner>
       ) : null}
       {url ? (
@@ -39,14 +45,33 @@ export function CalendarAddress({ householdId }: { householdId: string }) {
           </Button>
         </div>
       ) : null}
-      <Button
-        icon={<CalendarDays aria-hidden />}
-        busy={make.isPending}
-        onClick={() => make.mutate()}
-      >
-        {url ? 'Make another address' : 'Make a calendar address'}
-      </Button>
-      <p className="text-sm text-ink-soft">A new address makes an earlier one stop working.</p>
+      <div className="flex flex-wrap gap-3">
+        <Button
+          icon={<CalendarDays aria-hidden />}
+          busy={make.isPending}
+          onClick={() => make.mutate()}
+        >
+          {url ? 'Make another address' : 'Make a calendar address'}
+        </Button>
+        <Button
+          icon={<CalendarOff aria-hidden />}
+          busy={end.isPending}
+          onClick={() =>
+            end.mutate(undefined, {
+              onSuccess: () => {
+                make.reset();
+                toast.success('Your address works no more.');
+              },
+            })
+          }
+        >
+          End my address
+        </Button>
+      </div>
+      <p className="text-sm text-ink-soft">
+        The address is yours alone and shows what you may see. A new one makes an earlier one stop
+        working.
+      </p>
     </div>
   );
 }

@@ -1,7 +1,10 @@
+import { CalendarDays } from 'lucide-react';
 import { Link } from 'react-router-dom';
 import { classLabel } from '../../../../server/contract/document-classes.ts';
-import type { Reminder } from '../../../../server/contract/reminders.ts';
+import { calendarEndpoints, type Reminder } from '../../../../server/contract/reminders.ts';
 import { Badge, type BadgeTone } from '../../../components/ui/badge.tsx';
+import { FileLink } from '../../../components/ui/button.tsx';
+import { buildApiUrl } from '../../../lib/api-client.ts';
 import { formatDay, formatInstant } from '../../../lib/format.ts';
 import { paths } from '../../../lib/paths.ts';
 
@@ -56,6 +59,17 @@ export function ReminderList({
               </p>
             ) : null}
           </div>
+          {reminder.paperId && reminder.state === 'coming' ? (
+            <FileLink
+              href={buildApiUrl(calendarEndpoints.getPaperCalendar, {
+                params: { id: reminder.paperId },
+              })}
+              icon={<CalendarDays aria-hidden />}
+              aria-label={`Dates of paper ${reminder.paperNumber} for a calendar`}
+            >
+              .ics
+            </FileLink>
+          ) : null}
           <Badge tone={stateTones[reminder.state]}>{stateWords[reminder.state]}</Badge>
         </li>
       ))}
