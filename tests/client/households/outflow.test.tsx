@@ -23,18 +23,18 @@ const outflow: Outflow = {
 describe('the outflow', () => {
   it('falls year by year to what stays for good and what is not settled', () => {
     const shape = shapeOutflow(outflow);
-    expect(shape.total).toBe(100);
-    expect(shape.steps[0]).toEqual({ year: 2026, leaving: 0, before: 70, after: 70 });
-    expect(shape.steps[1]).toEqual({ year: 2027, leaving: 20, before: 70, after: 50 });
-    expect(shape.steps.at(-1)).toEqual({ year: 2032, leaving: 10, before: 50, after: 40 });
-    expect(shape.steps.at(-1)?.after).toBe(outflow.permanent + outflow.open);
+    expect(shape.total).toBe(105);
+    expect(shape.steps[0]).toEqual({ year: 2026, leaving: 0, before: 75, after: 75 });
+    expect(shape.steps[1]).toEqual({ year: 2027, leaving: 20, before: 75, after: 55 });
+    expect(shape.steps.at(-1)).toEqual({ year: 2032, leaving: 10, before: 55, after: 45 });
+    expect(shape.steps.at(-1)?.after).toBe(outflow.permanent + outflow.open + outflow.toReview);
   });
 
   it('can be read and heard without the picture', () => {
     render(<OutflowPicture outflow={outflow} />);
     expect(
       screen.getByRole('figure', {
-        name: /100 sheets in the house: 30 sheets may leave now, 30 sheets may leave year by year until 2032, 25 sheets stay for good and for 15 sheets it is not settled yet\. 40 sheets have left already\./,
+        name: /105 sheets in the house: 30 sheets may leave now, 30 sheets may leave year by year until 2032, 25 sheets stay for good, for 15 sheets it is not settled yet and 5 sheets wait to be looked at\. 40 sheets have left already\./,
       }),
     ).toBeInTheDocument();
     const table = screen.getByRole('table', { hidden: true });
