@@ -193,7 +193,14 @@ export type UpdatePaper = z.infer<typeof updatePaperSchema>;
 export const enterPaperSchema = z
   .object({
     class: classIdSchema,
-    title: z.string().trim().min(1, 'Say what it is in a few words.').max(200),
+    /** May be left out: the kind of paper then says what it is. */
+    title: z
+      .string()
+      .trim()
+      .min(1, 'Say what it is in a few words.')
+      .max(200)
+      .nullable()
+      .default(null),
     boxId: z.uuid().nullable().default(null),
     country: countrySchema.optional(),
     facts: factsPatchSchema.default({}),
