@@ -2,6 +2,7 @@
  * Scans and page pictures on disk, under ids that the server made. The uploader's file name never
  * touches the file system.
  */
+import { randomUUID } from 'node:crypto';
 import { mkdir, open, readFile, rename, rm, stat, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 
@@ -65,7 +66,8 @@ export function openScanStorage(folder: string): ScanStorage {
     async check() {
       try {
         await mkdir(folder, { recursive: true });
-        const probe = path.join(folder, `.probe-${process.pid}`);
+        // Several may ask at once: each writes a file of its own.
+        const probe = path.join(folder, `.probe-${randomUUID()}`);
         await writeFile(probe, '');
         await rm(probe);
         return (await stat(folder)).isDirectory();
@@ -79,7 +81,7 @@ export function openScanStorage(folder: string): ScanStorage {
 /** Writes beside the target, flushes, then renames: readers never meet half a file. */
 async function writeWhole(target: string, bytes: Uint8Array): Promise<void> {
   await mkdir(path.dirname(target), { recursive: true, mode: 0o700 });
-  const part = `${target}.${process.pid}.${Date.now().toString(36)}.part`;
+  const part = `${target}.${randomUUID()}.part`;
   try {
     const file = await open(part, 'w', 0o600);
     try {

@@ -33,10 +33,18 @@ export function createUploadReceiver(
   const folder = path.join(uploadsDir, '.incoming');
   const engine: StorageEngine = {
     _handleFile(request, file, callback) {
+      // Files are named in the order they came, whichever is written first.
+      const entry: ReceivedFile = {
+        label: cleanFileName(file.originalname),
+        partPath: null,
+        bytes: 0,
+        sha256: '',
+      };
+      request.receivedFiles ??= [];
+      request.receivedFiles.push(entry);
       receive(file.stream, folder, limits.maxFileBytes).then(
         (received) => {
-          request.receivedFiles ??= [];
-          request.receivedFiles.push({ label: cleanFileName(file.originalname), ...received });
+          Object.assign(entry, received);
           callback(null, {});
         },
         (error: unknown) => callback(error),
