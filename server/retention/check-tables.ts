@@ -67,11 +67,11 @@ function findSourceFaults(places: readonly Place[], tables: readonly RuleTable[]
         message: `The rule "${rule.id}" says "law" but names no law; give the statute or change the basis.`,
       });
     }
-    if ((status === 'memory') !== (readOn === null)) {
+    if (status === 'memory' && readOn !== null) {
       faults.push({
         table,
-        path: ['rules', index, 'source', 'status'],
-        message: `The rule "${rule.id}" must say on which day its source was read, unless its status is "memory".`,
+        path: ['rules', index, 'source', 'readOn'],
+        message: `The rule "${rule.id}" is from memory, so nobody read its source on ${readOn}; remove "readOn" or correct the status.`,
       });
     }
   }

@@ -48,7 +48,7 @@ export const ruleSourceSchema = z.strictObject({
   title: z.string().min(2),
   section: z.string().nullable().default(null),
   status: sourceStatusSchema,
-  /** Day the source was last looked at; null when the rule comes from memory. */
+  /** Day on which the source was last opened; null when none is recorded, and for a rule from memory. */
   readOn: isoDateSchema.nullable().default(null),
 });
 
