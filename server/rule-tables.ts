@@ -7,6 +7,7 @@ import { LineCounter, parseDocument } from 'yaml';
 import type { Document } from 'yaml';
 import type { z } from 'zod';
 import type { IsoDate } from './contract/dates.ts';
+import { classIds } from './contract/document-classes.ts';
 import { findOverdueReviews, findTableFaults } from './retention/check-tables.ts';
 import type { TableFault } from './retention/check-tables.ts';
 import { buildRuleSet } from './retention/rule-set.ts';
@@ -16,6 +17,8 @@ import type { Handling, RuleTable } from './retention/rule-schema.ts';
 
 const shippedFolder = fileURLToPath(new URL('../rules', import.meta.url));
 const handlingFile = 'handling.yaml';
+const missingCommon =
+  'The common rule table is missing or cannot be read; the tables were not held against each other.';
 
 export interface RuleFault {
   readonly file: string;
@@ -66,16 +69,27 @@ function faultAt(parsed: ParsedFile, where: readonly PropertyKey[], message: str
   return { file: parsed.file, ...locate(parsed, where), message };
 }
 
+/** The parser's first line, ended like a sentence. */
+function describeSyntax(message: string): string {
+  const first = message.split('\n')[0] ?? '';
+  return `This is not YAML: ${first.replace(/[:.\s]+$/, '')}.`;
+}
+
 function describeIssue(issue: z.core.$ZodIssue, value: unknown): string {
   const field = issue.path.map(String).join('.') || 'the table';
   if (issue.code === 'invalid_value' && issue.path.includes('classes')) {
     return `Unknown class ${JSON.stringify(value)} in ${field}; use an id of the class list.`;
   }
+  if (issue.code === 'invalid_value' && value !== undefined) {
+    const known = issue.values.map(String);
+    const list = known.length > 16 ? `one of the ${known.length} known ones` : known.join(', ');
+    return `Unknown value ${JSON.stringify(value)} in ${field}; use ${list}.`;
+  }
   if (issue.code === 'unrecognized_keys') {
     return `Unknown key ${issue.keys.map((key) => `"${key}"`).join(', ')} in ${field}; remove it or correct its name.`;
   }
   if (value === undefined) return `${field} is missing.`;
-  return `${field}: ${issue.message}`;
+  return `${field}: ${issue.message.replace(/\.$/, '')}.`;
 }
 
 function valueAt(root: unknown, where: readonly PropertyKey[]): unknown {
@@ -98,7 +112,7 @@ function parseFile<T>(
   const parsed = { file, document, lines };
   for (const error of document.errors) {
     const { line, col } = lines.linePos(error.pos[0]);
-    faults.push({ file, line, column: col, message: error.message.split('\n')[0] ?? 'not YAML' });
+    faults.push({ file, line, column: col, message: describeSyntax(error.message) });
   }
   if (document.errors.length > 0) return null;
   const raw: unknown = document.toJS();
@@ -124,7 +138,7 @@ export function checkRuleTables(folder = shippedFolder, on: IsoDate | null = nul
   const hash = createHash('sha256');
   const files: ParsedFile[] = [];
   const tables: RuleTable[] = [];
-  let handling: Handling = { classes: {} };
+  let handling: Handling | null = null;
   const names = readdirSync(folder)
     .filter((name) => name.endsWith('.yaml'))
     .sort();
@@ -133,7 +147,7 @@ export function checkRuleTables(folder = shippedFolder, on: IsoDate | null = nul
     const text = readFileSync(path.join(folder, name), 'utf8');
     hash.update(name).update('\0').update(text).update('\0');
     if (name === handlingFile) {
-      handling = parseFile(name, text, handlingSchema, faults)?.data ?? handling;
+      handling = parseFile(name, text, handlingSchema, faults)?.data ?? null;
       continue;
     }
     const result = parseFile(name, text, ruleTableSchema, faults);
@@ -145,10 +159,22 @@ export function checkRuleTables(folder = shippedFolder, on: IsoDate | null = nul
     const parsed = files[fault.table];
     if (parsed) faults.push(faultAt(parsed, fault.path, fault.message));
   };
-  // Tables are only held against each other when each of them could be read.
-  if (faults.length === 0) findTableFaults(tables).forEach(tell);
+  // Without the common table every country would seem to leave gaps.
+  if (tables.some((table) => table.country === 'common')) findTableFaults(tables).forEach(tell);
+  else faults.push({ file: 'common.yaml', line: 1, column: 1, message: missingCommon });
+  const known = handling?.classes;
+  const unhandled = known ? classIds.filter((id) => !known[id]) : [];
+  if (unhandled.length > 0) {
+    const message = `Nothing says how these leave: ${unhandled.join(', ')}. Give each a level and a disposal.`;
+    faults.push({ file: handlingFile, line: 1, column: 1, message });
+  }
   if (on) findOverdueReviews(tables, on).forEach(tell);
-  return { tables, handling, version: hash.digest('hex').slice(0, 16), faults };
+  return {
+    tables,
+    handling: handling ?? { classes: {} },
+    version: hash.digest('hex').slice(0, 16),
+    faults,
+  };
 }
 
 /** The rule tables of a folder, by default the shipped one; throws RuleTableError when they have faults. */

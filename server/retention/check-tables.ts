@@ -1,21 +1,13 @@
 /** Faults that only show when rules and tables are seen together. Pure: places are paths into the table. */
 import type { IsoDate } from '../contract/dates.ts';
 import { classIds } from '../contract/document-classes.ts';
-import { parsePeriod } from './dates.ts';
-import type { Keep, Rule, RuleTable } from './rule-schema.ts';
+import { findContradictions, findGapsInTime } from './check-conflicts.ts';
+import { isRealDay, parsePeriod } from './dates.ts';
+import type { Keep, RuleTable } from './rule-schema.ts';
+import { limitationKinds } from './rule-schema.ts';
+import type { Place, TableFault } from './table-fault.ts';
 
-export interface TableFault {
-  /** Which table, by its place in the list that was checked. */
-  readonly table: number;
-  readonly path: readonly (string | number)[];
-  readonly message: string;
-}
-
-interface Place {
-  readonly table: number;
-  readonly index: number;
-  readonly rule: Rule;
-}
+export type { TableFault } from './table-fault.ts';
 
 function findIdFaults(places: readonly Place[], tables: readonly RuleTable[]): TableFault[] {
   const faults: TableFault[] = [];
@@ -94,6 +86,52 @@ function listPeriods(keep: Keep): [string, string][] {
   return found;
 }
 
+/** Days of a year as `mm-dd` that a rule counts to, with where they stand. */
+function listMonthDays(keep: Keep): [string, string][] {
+  const found: [string, string][] = [];
+  if (keep.how === 'return-window') {
+    if (keep.anchor) found.push(['anchor', keep.anchor]);
+    for (const day of keep.quarterDays) found.push(['quarterDays', day]);
+  }
+  if ('due' in keep && 'monthDay' in keep.due) found.push(['due', keep.due.monthDay]);
+  return found;
+}
+
+function findDayFaults(places: readonly Place[]): TableFault[] {
+  const faults: TableFault[] = [];
+  for (const { rule, table, index } of places) {
+    for (const [name, monthDay] of listMonthDays(rule.keep)) {
+      if (isRealDay(`2000-${monthDay}`)) continue;
+      faults.push({
+        table,
+        path: ['rules', index, 'keep', name],
+        message: `The rule "${rule.id}" can never apply: no year has a ${monthDay}; write a month and a day that exist.`,
+      });
+    }
+  }
+  return faults;
+}
+
+/** A rule that asks for an event not to have happened, and counts from it. */
+function findTriggerFaults(places: readonly Place[]): TableFault[] {
+  const faults: TableFault[] = [];
+  for (const { rule, table, index } of places) {
+    const { keep, when } = rule;
+    if (!when || !('trigger' in keep)) continue;
+    const absent = Object.entries(when)
+      .filter(([, value]) => value === 'never' || value === 'unknown' || value === 'not-known')
+      .map(([name]) => name);
+    const isLost = keep.trigger.every((moment) => absent.includes(moment));
+    if (!isLost && !(keep.waitsFor && absent.includes(keep.waitsFor))) continue;
+    faults.push({
+      table,
+      path: ['rules', index, 'when'],
+      message: `The rule "${rule.id}" can never apply: it asks that its own trigger is not there.`,
+    });
+  }
+  return faults;
+}
+
 function findPeriodFaults(places: readonly Place[]): TableFault[] {
   const faults: TableFault[] = [];
   for (const { rule, table, index } of places) {
@@ -153,55 +191,16 @@ function findRegionFaults(places: readonly Place[], tables: readonly RuleTable[]
       });
     }
   }
-  return faults;
-}
-
-function overlap<T>(a: readonly T[] | undefined, b: readonly T[] | undefined): boolean {
-  return !a || !b || a.some((entry) => b.includes(entry));
-}
-
-function conditionsOf(rule: Rule): string {
-  return JSON.stringify([
-    rule.regions,
-    rule.exceptRegions,
-    rule.documentKind,
-    rule.recordKind,
-    rule.when,
-  ]);
-}
-
-function isSameTime(a: Rule, b: Rule): boolean {
-  const startsBeforeEnd = (x: Rule, y: Rule): boolean =>
-    !x.validFrom || !y.validTo || x.validFrom <= y.validTo;
-  return startsBeforeEnd(a, b) && startsBeforeEnd(b, a);
-}
-
-/** The same papers under the same conditions, counted from the same day, for two lengths; or for ever and not. */
-function contradict(a: Rule, b: Rule): boolean {
-  if (!overlap(a.classes, b.classes) || !overlap(a.roles, b.roles)) return false;
-  if (!isSameTime(a, b) || conditionsOf(a) !== conditionsOf(b)) return false;
-  const absolute = ['permanent', 'none', 'owner-decides'];
-  if (a.keep.how !== b.keep.how)
-    return absolute.includes(a.keep.how) || absolute.includes(b.keep.how);
-  if (!('trigger' in a.keep) || !('trigger' in b.keep)) return false;
-  const { period: lengthA, ...restA } = a.keep;
-  const { period: lengthB, ...restB } = b.keep;
-  return (
-    JSON.stringify(restA) === JSON.stringify(restB) &&
-    JSON.stringify(lengthA) !== JSON.stringify(lengthB)
-  );
-}
-
-function findContradictions(places: readonly Place[]): TableFault[] {
-  const faults: TableFault[] = [];
-  for (const [position, later] of places.entries()) {
-    for (const earlier of places.slice(0, position)) {
-      if (earlier.table !== later.table || !contradict(earlier.rule, later.rule)) continue;
-      faults.push({
-        table: later.table,
-        path: ['rules', later.index],
-        message: `The rules "${earlier.rule.id}" and "${later.rule.id}" contradict each other: same papers, same start, different length.`,
-      });
+  for (const [table, { limitation, regions, name }] of tables.entries()) {
+    for (const kind of limitationKinds) {
+      for (const region of Object.keys(limitation?.[kind].regions ?? {})) {
+        if (regions.includes(region)) continue;
+        faults.push({
+          table,
+          path: ['limitation', kind, 'regions', region],
+          message: `The limitation periods name the region "${region}", which ${name} does not list.`,
+        });
+      }
     }
   }
   return faults;
@@ -247,13 +246,16 @@ export function findTableFaults(tables: readonly RuleTable[]): TableFault[] {
     ...findIdFaults(places, tables),
     ...findSourceFaults(places, tables),
     ...findPeriodFaults(places),
+    ...findDayFaults(places),
+    ...findTriggerFaults(places),
     ...findRegionFaults(places, tables),
     ...findContradictions(places),
+    ...findGapsInTime(places),
     ...findGaps(tables),
   ];
 }
 
-/** Rules whose review date has passed on a day. */
+/** Rules whose review date has passed on a day, or whose source is said to be read on a day to come. */
 export function findOverdueReviews(tables: readonly RuleTable[], on: IsoDate): TableFault[] {
   const faults: TableFault[] = [];
   for (const [index, table] of tables.entries()) {
@@ -265,6 +267,14 @@ export function findOverdueReviews(tables: readonly RuleTable[], on: IsoDate): T
       });
     }
     for (const [place, rule] of table.rules.entries()) {
+      const { readOn } = rule.source;
+      if (readOn !== null && readOn > on) {
+        faults.push({
+          table: index,
+          path: ['rules', place, 'source', 'readOn'],
+          message: `The source of the rule "${rule.id}" cannot have been read on ${readOn}: that day has not come.`,
+        });
+      }
       if (!rule.reviewBy || rule.reviewBy >= on) continue;
       faults.push({
         table: index,

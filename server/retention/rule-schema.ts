@@ -237,9 +237,9 @@ export const ruleSchema = z.strictObject({
   id: z
     .string()
     .regex(/^[a-z]{2,6}(\.[a-z0-9-]+)+$/, 'Write the id like gb.income-tax.individual.'),
-  title: sentence,
-  classes: z.array(classIdSchema).min(1),
-  roles: z.array(caseRoleSchema).min(1).optional(),
+  title: sentence.describe('What the rule is about, as people read it'),
+  classes: z.array(classIdSchema).min(1).describe('Kinds of paper it is for'),
+  roles: z.array(caseRoleSchema).min(1).optional().describe('Whose papers; all when absent'),
   /** What happens while the role is not known: counted (the default), or counted only with these inputs. */
   ifRoleUnknown: z.strictObject({ onlyWith: inputNameSchema }).optional(),
   regions: z.array(z.string()).min(1).optional(),
@@ -247,12 +247,15 @@ export const ruleSchema = z.strictObject({
   ifRegionUnknown: z.enum(['count', 'skip']).default('count'),
   documentKind: kindConditionSchema.optional(),
   recordKind: kindConditionSchema.optional(),
-  when: z.partialRecord(inputNameSchema, z.enum(conditionValues)).optional(),
+  when: z
+    .partialRecord(inputNameSchema, z.enum(conditionValues))
+    .optional()
+    .describe('Answers that let the rule apply'),
   /**
    * An addition (a practice's own rule) is asked beside all others and takes none's place: it can only make the
    * time longer.
    */
-  addition: z.boolean().default(false),
+  addition: z.boolean().default(false).describe('Asked beside all other rules; only lengthens'),
   keep: keepSchema,
   disposal: z.enum(disposals).optional(),
   original: z.enum(originals).default('scan-is-enough'),
@@ -262,10 +265,10 @@ export const ruleSchema = z.strictObject({
   basis: basisSchema,
   source: ruleSourceSchema,
   /** The law in force on the trigger decides: first and last trigger day for which the rule holds. */
-  validFrom: isoDateSchema.optional(),
-  validTo: isoDateSchema.optional(),
-  reviewBy: isoDateSchema.optional(),
-  note: sentence.optional(),
+  validFrom: isoDateSchema.optional().describe('First trigger day for which it holds'),
+  validTo: isoDateSchema.optional().describe('Last trigger day for which it holds'),
+  reviewBy: isoDateSchema.optional().describe('By when its source is to be checked again'),
+  note: sentence.optional().describe('Where sources disagree, and which one counts'),
 });
 export type Rule = z.infer<typeof ruleSchema>;
 export type RuleSource = z.infer<typeof ruleSourceSchema>;

@@ -98,6 +98,18 @@ export const caHand: HandCases[] = [
       ['never filed', 'donation-receipt', { ...person, taxYear: 2018, filedOn: null }, 'open'],
       ['filing not known', 'donation-receipt', { ...person, taxYear: 2018 }, 'open'],
       [
+        'property tax that a return used',
+        'property-tax-bill',
+        { ...person, usedForTax: true, taxYear: 2018, filedOn: '2019-04-12' },
+        '2024-12-31',
+      ],
+      [
+        'property tax that no return used: no rule',
+        'property-tax-bill',
+        { ...person, usedForTax: false, documentDate: '2010-04-12' },
+        'open',
+      ],
+      [
         'bank statement used',
         'bank-statement',
         { ...person, usedForTax: true, taxYear: 2018, filedOn: '2019-04-12' },
