@@ -67,7 +67,7 @@ describe('POST /api/assessments', () => {
     });
     const [rule] = body.rules as Record<string, unknown>[];
     expect(Object.keys(rule ?? {}).sort()).toEqual(['basis', 'id', 'keepUntil', 'source']);
-    expect(Object.keys((rule?.source ?? {}) as object).sort()).toEqual([
+    expect(Object.keys(rule?.source ?? {}).sort()).toEqual([
       'authority',
       'section',
       'status',
