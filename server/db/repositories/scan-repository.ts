@@ -105,12 +105,24 @@ export async function requeueScan(id: string, transaction: Transaction): Promise
   return count === 1;
 }
 
-/** Scans that wait to be read or whose reading was interrupted, oldest first. */
-export async function listUnreadScanIds(): Promise<string[]> {
-  const rows = await ScanModel.findAll({
-    attributes: ['id'],
-    where: { status: { [Op.in]: ['waiting', 'reading'] } },
-    order: ['createdAt'],
-  });
+/** Scans that wait to be read or whose reading was interrupted and that no job waits for, oldest first. */
+export function listUnreadScanIds(): Promise<string[]> {
+  return listUnreadWithoutJob(['created', 'retry']);
+}
+
+/** Unread scans that no job waits for and none is at. */
+export function listStrandedScanIds(): Promise<string[]> {
+  return listUnreadWithoutJob(['created', 'retry', 'active']);
+}
+
+async function listUnreadWithoutJob(jobStates: string[]): Promise<string[]> {
+  const rows = await requireSequelize().query<{ id: string }>(
+    `select s.id from scans s
+     where s.status in ('waiting', 'reading')
+       and not exists (select 1 from jobs.job j where j.name = 'read-scan'
+         and j.state::text = any($jobStates::text[]) and j.data ->> 'scanId' = s.id::text)
+     order by s.created_at`,
+    { bind: { jobStates }, type: QueryTypes.SELECT },
+  );
   return rows.map((row) => row.id);
 }

@@ -5,6 +5,7 @@
 import type { ReadingContext } from '../../reading/types.ts';
 import type { PageRow } from '../../db/models/page-model.ts';
 import type { ScanRow } from '../../db/models/scan-model.ts';
+import { isConnectionLoss } from '../../db/connection-loss.ts';
 import { appendEvent } from '../../db/repositories/event-repository.ts';
 import { findHousehold, lockHousehold } from '../../db/repositories/household-repository.ts';
 import {
@@ -23,6 +24,16 @@ import { createPapersFromReading } from '../papers/create-papers.ts';
 
 export interface ReadScanDeps extends Pick<Deps, 'clock' | 'config' | 'ruleSet' | 'storage'> {
   reader: PageReader;
+  /** Set off when the worker is asked to stop: the pages under way are finished, the rest is handed back. */
+  stopping?: AbortSignal;
+}
+
+/** The worker stops in the middle of a scan; another goes on with the pages that are missing. */
+export class HandedBackError extends Error {
+  constructor() {
+    super('Reading was handed back because the worker stops.');
+    this.name = 'HandedBackError';
+  }
 }
 
 const giveUpAfter = 4;
@@ -39,6 +50,8 @@ export async function readScan(scanId: string, deps: ReadScanDeps): Promise<void
       await updateScan(scan.id, { status: 'failed', reason: error.message });
       return;
     }
+    // Neither the end of the worker nor of the database is an attempt that failed.
+    if (deps.stopping?.aborted || isConnectionLoss(error)) throw error;
     const attempts = scan.attempts + 1;
     await updateScan(scan.id, {
       attempts,
@@ -64,13 +77,16 @@ async function readPages(scan: ScanRow, deps: ReadScanDeps): Promise<void> {
     );
     // As many pages are under way as the reader has threads; each is saved when it is ready.
     const lanes = Array.from({ length: deps.config.readerWorkers }, async () => {
-      for (let number = missing.shift(); number !== undefined; number = missing.shift()) {
+      while (!deps.stopping?.aborted) {
+        const number = missing.shift();
+        if (number === undefined) return;
         await readOnePage(scan, file, number, deps);
       }
     });
     const results = await Promise.allSettled(lanes);
     const failed = results.find((result) => result.status === 'rejected');
     if (failed) throw failed.reason;
+    if (missing.length > 0) throw new HandedBackError();
   } finally {
     file.close();
   }
