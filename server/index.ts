@@ -4,6 +4,7 @@ import { createApp } from './app.ts';
 import { loadConfigOrExit } from './config.ts';
 import { openDeps, stopOnSignal } from './start-parts.ts';
 import { sweepIncoming } from './storage/upload-receiver.ts';
+import { sweepLeftovers } from './use-cases/scans/sweep-leftovers.ts';
 
 const config = loadConfigOrExit();
 const deps = await openDeps(config, { supervise: false });
@@ -25,6 +26,8 @@ server.listen(config.port, config.host, () => {
 });
 const anHourMs = 60 * 60 * 1000;
 await sweepIncoming(config.uploadsDir, anHourMs, deps.clock.now());
+const swept = await sweepLeftovers(deps);
+if (swept > 0) deps.log.info({ swept }, 'files of a killed process removed');
 
 stopOnSignal(async () => {
   await new Promise<void>((resolve) => {

@@ -3,7 +3,7 @@
  * touches the file system.
  */
 import { randomUUID } from 'node:crypto';
-import { mkdir, open, readFile, rename, rm, stat, writeFile } from 'node:fs/promises';
+import { mkdir, open, readdir, readFile, rename, rm, stat, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 
 export interface ScanStorage {
@@ -25,8 +25,18 @@ export interface ScanStorage {
     page: number,
     kind: PictureKind,
   ): Promise<Buffer | null>;
+  /** What a process that was killed may have left: scans nobody recorded, half-written pictures. */
+  findLeftovers(writtenBefore: Date): Promise<Leftovers>;
+  removePart(part: string): Promise<void>;
   /** Whether the folder can be written to. */
   check(): Promise<boolean>;
+}
+
+export interface Leftovers {
+  /** Scans that have a folder; those without a record are leftovers. */
+  scans: { householdId: string; scanId: string }[];
+  /** Files that were never finished. */
+  parts: string[];
 }
 
 export type PictureKind = 'image' | 'thumbnail';
@@ -63,6 +73,25 @@ export function openScanStorage(folder: string): ScanStorage {
         throw error;
       }
     },
+    async findLeftovers(writtenBefore) {
+      const found: Leftovers = { scans: [], parts: [] };
+      for (const householdId of await listFolder(folder)) {
+        if (!idPattern.test(householdId)) continue;
+        for (const scanId of await listFolder(path.join(folder, householdId))) {
+          if (!idPattern.test(scanId)) continue;
+          const scanFolder = folderOf(householdId, scanId);
+          if (await isOlder(scanFolder, writtenBefore)) found.scans.push({ householdId, scanId });
+          for (const name of await listFolder(scanFolder)) {
+            const file = path.join(scanFolder, name);
+            if (name.endsWith('.part') && (await isOlder(file, writtenBefore))) {
+              found.parts.push(file);
+            }
+          }
+        }
+      }
+      return found;
+    },
+    removePart: (part) => rm(part, { force: true }),
     async check() {
       try {
         await mkdir(folder, { recursive: true });
@@ -76,6 +105,15 @@ export function openScanStorage(folder: string): ScanStorage {
       }
     },
   };
+}
+
+function listFolder(folder: string): Promise<string[]> {
+  return readdir(folder).catch(() => []);
+}
+
+async function isOlder(file: string, instant: Date): Promise<boolean> {
+  const info = await stat(file).catch(() => null);
+  return info !== null && info.mtimeMs < instant.getTime();
 }
 
 /** Writes beside the target, flushes, then renames: readers never meet half a file. */

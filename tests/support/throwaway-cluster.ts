@@ -19,6 +19,8 @@ const prefix = 'slackwater-test-';
 export interface ThrowawayCluster {
   port: number;
   urlOf: (database: string) => string;
+  /** Kills the server as a power cut would, and starts it again on the same port. */
+  crash: () => Promise<void>;
   /** Stops the server and deletes its files. */
   close: () => Promise<void>;
 }
@@ -40,6 +42,11 @@ export async function startThrowawayCluster(): Promise<ThrowawayCluster> {
   return {
     port: cluster.port,
     urlOf: cluster.urlOf,
+    crash: async () => {
+      const file = path.join(folder, 'data', 'postmaster.pid');
+      process.kill(Number(readFileSync(file, 'utf8').split('\n')[0]), 'SIGKILL');
+      await cluster.restart();
+    },
     close: async () => {
       await cluster.stop();
       rmSync(folder, { recursive: true, force: true });

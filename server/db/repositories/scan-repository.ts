@@ -56,6 +56,12 @@ export async function findScan(id: string): Promise<ScanRow | null> {
   return found?.get({ plain: true }) ?? null;
 }
 
+/** Those of the ids that are scans on record. */
+export async function listKnownScanIds(ids: string[]): Promise<Set<string>> {
+  const rows = await ScanModel.findAll({ attributes: ['id'], where: { id: { [Op.in]: ids } } });
+  return new Set(rows.map((row) => row.id));
+}
+
 /** The scan of a household with these very bytes. */
 export async function findScanByHash(householdId: string, sha256: string): Promise<ScanRow | null> {
   const found = await ScanModel.findOne({ where: { householdId, sha256 } });
