@@ -7,6 +7,8 @@ import type { IsoDate } from '../contract/dates.ts';
 import type { ClassId } from '../contract/document-classes.ts';
 import type { PaperStatus, Pile } from '../contract/papers.ts';
 import { wordDay } from './dates.ts';
+import type { EarlySheetRecord } from './sheet-clock.ts';
+import { findSheetClocks } from './sheet-clock.ts';
 
 export type DepartureKind = 'shred' | 'recycle' | 'give-back' | 'pass-on';
 export const departureKinds = ['shred', 'recycle', 'give-back', 'pass-on'] as const;
@@ -51,6 +53,8 @@ export interface GateQuestion {
   how: DepartureKind;
   /** The day on which it leaves. */
   on: IsoDate;
+  /** What is on record about letting its sheet go before its date; absent where nothing is. */
+  early?: EarlySheetRecord | null;
   /** Today; null while a departure is only planned and may lie ahead. */
   today: IsoDate | null;
 }
@@ -110,7 +114,15 @@ function checkHolds({ assessment, holds }: GateQuestion): GateReason[] {
   ];
 }
 
-function checkDates({ paper, assessment, on }: GateQuestion): GateReason[] {
+/** Whether the sheet may be shredded on the day although its date has not come: its scan stays. */
+function mayGoEarly({ assessment, how, on, early }: GateQuestion): boolean {
+  if (how !== 'shred' || !early) return false;
+  const { isEarly, sheetFrom } = findSheetClocks(assessment, early, on);
+  return isEarly && sheetFrom !== null && sheetFrom <= on;
+}
+
+function checkDates(question: GateQuestion): GateReason[] {
+  const { paper, assessment, on } = question;
   if (assessment.permanent) {
     return [{ code: 'permanent', sentence: 'It is kept for good.' }, ...checkOriginal(assessment)];
   }
@@ -131,6 +143,7 @@ function checkDates({ paper, assessment, on }: GateQuestion): GateReason[] {
       { code: 'no-date', sentence: 'No day is known from which it may go: ask the adviser.' },
     ];
   }
+  if (mayGoEarly(question)) return reasons;
   if (assessment.shredFrom > on) {
     reasons.push({
       code: 'not-yet',

@@ -236,21 +236,14 @@ function resolveYear(
   endOf: (day: IsoDate) => IsoDate,
   waitsFor: DayInput | null,
 ): ResolvedMoment {
-  const event = findLatest([waitsFor ? inputs[waitsFor] : null, inputs.transactionCompletedOn]);
-  if (event) {
-    const ofEvent = endOf(event);
-    if (given) return found(moment, laterOf(given, ofEvent));
-    return found(
-      moment,
-      ofEvent,
-      `${wordDay(event)} falls in the year that ends on ${wordDay(ofEvent)}.`,
-    );
-  }
-  if (given) return found(moment, given);
-  const day = findDayInYear(inputs);
-  if (!day) return missing(moment);
-  const end = endOf(day);
-  return found(moment, end, `${wordDay(day)} falls in the year that ends on ${wordDay(end)}.`);
+  const disposal = waitsFor ? inputs[waitsFor] : null;
+  // The disposal decides the year of its papers; without one the day of the paper does.
+  const day = disposal ?? findDayInYear(inputs);
+  const last = findLatest([given === null || disposal ? day : null, inputs.transactionCompletedOn]);
+  const end = last ? endOf(last) : null;
+  if (given !== null) return found(moment, end ? laterOf(given, end) : given);
+  if (!last || !end) return missing(moment);
+  return found(moment, end, `${wordDay(last)} falls in the year that ends on ${wordDay(end)}.`);
 }
 
 const endOfGbTaxYear = (day: IsoDate): IsoDate => endOfYearEnding(day, '04-05');

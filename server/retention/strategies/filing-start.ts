@@ -80,10 +80,6 @@ export function keepFromFiling(
   if (filed === null) return openBecause('No return has been filed, so the clock has not started.');
   const due = findFilingDue(keep, trigger, scene);
   if (!due) return openBecause('The year of the return is not known.');
-  if (keep.startFrom === 'due') {
-    addStep(scene, `Counts from the due day ${wordDay(due)}.`, due);
-    return { kind: 'dated', until: countFrom(keep, due, scene) };
-  }
   if (filed === undefined) {
     return openUntilAnswered(
       'When the return of that year was filed is not known.',
@@ -91,6 +87,10 @@ export function keepFromFiling(
       countFrom(keep, due, scene),
       'the return was filed on time',
     );
+  }
+  if (keep.startFrom === 'due') {
+    addStep(scene, `Counts from the due day ${wordDay(due)}.`, due);
+    return { kind: 'dated', until: countFrom(keep, due, scene) };
   }
   const start = laterOf(filed, due);
   addStep(

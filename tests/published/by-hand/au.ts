@@ -88,10 +88,10 @@ export const auHand: HandCases[] = [
         '2026-01-01',
       ],
       [
-        'work expense not known',
+        'work expense not known: six years from the receipt are longer',
         'purchase-receipt',
         { ...person, documentDate: '2023-05-05', lodgedOn: '2023-08-08' },
-        '2028-10-31',
+        '2029-05-05',
       ],
     ],
   },
