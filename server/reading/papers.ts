@@ -29,7 +29,7 @@ export function readPaper(
   context: ReadingContext,
 ): Omit<PaperReading, 'from' | 'to'> {
   const lines = listPaperLines(pages);
-  const { country } = findCountry(lines);
+  const { country } = findCountry(lines, context.country);
   const names = context.businessNames ?? [];
   const isOwnBusiness = isFromOwnBusiness(lines, names);
   const classification = classifyPaper(lines, {

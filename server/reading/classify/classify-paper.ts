@@ -9,7 +9,7 @@ import { loadVocabulary } from './vocabulary.ts';
 import type { Vocabulary } from './vocabulary.ts';
 
 /** Under this confidence the reader does not name a class. */
-export const recognitionLine = 0.4;
+export const recognitionLine = 0.2;
 /** How many points apart two classes are when one is e times as likely. */
 const temperature = 1.7;
 /** Points that half convince when there is no rival. */

@@ -15,6 +15,9 @@ export interface PaperCues {
 const postal =
   /\b[A-Z]{1,2}\d[A-Z\d]?\s?\d[A-Z]{2}\b|\b[A-Z]{2}\.?\s\d{5}(?:-\d{4})?\b|\b[A-Z]\d[A-Z]\s?\d[A-Z]\d\b|\b(?:NSW|VIC|QLD|SA|WA|TAS|ACT|NT)\s\d{4}\b|\b\d{5}\s[A-ZÄÖÜ][a-z]/;
 
+/** Sixteen figures in fours, as they are raised on cards. */
+const cardNumber = /\b\d{4}[ -]\d{4}[ -]\d{4}[ -]\d{4}\b/;
+
 /** The scores with what the cues add, highest first again. */
 export function applyCues(
   scores: readonly ClassScore[],
@@ -46,6 +49,9 @@ export function applyCues(
   const words = lines.reduce((sum, line) => sum + line.words.length, 0);
   if (words <= 45 && postal.test(text) && !/dear|total|£\s?\d|\$\s?\d|certif/i.test(text)) {
     add('envelope', words <= 30 ? 4 : 2.5, 'little but an address');
+  }
+  if (words <= 60 && cardNumber.test(text) && /valid|expires|thru|member since/i.test(text)) {
+    add('payment-card', 5, 'a card number and its dates');
   }
   return scores
     .map((score) => {

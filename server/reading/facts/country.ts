@@ -1,314 +1,12 @@
 /** Which country a paper's issuer belongs to, from what the paper shows. */
+import { europeanSigns } from './country-signs-europe.ts';
+import { overseasSigns } from './country-signs-overseas.ts';
 import type { PaperLine } from './paper-lines.ts';
 
-interface CountrySign {
-  country: string;
-  weight: number;
-  pattern: RegExp;
-}
+const signs = [...europeanSigns, ...overseasSigns];
 
-function sign(country: string, weight: number, ...sources: string[]): CountrySign[] {
-  return sources.map((source) => ({ country, weight, pattern: new RegExp(source, 'gi') }));
-}
-
-const signs: CountrySign[] = [
-  ...sign(
-    'GB',
-    6,
-    'HM Revenue',
-    '\\bHMRC\\b',
-    '\\bDVLA\\b',
-    'Driver (?:and|&) Vehicle',
-    'HM (?:Courts|Land|Passport|Treasury)',
-    'Department for Work',
-    'Companies House',
-    '\\bgov\\.uk\\b',
-    'Financial Conduct Authority',
-    'Land Registry',
-    'General Register Office',
-    'Office of the Public Guardian',
-    'England and Wales',
-    'United Kingdom of Great Britain',
-    'Prudential Regulation Authority',
-    'National Savings',
-    '\\bUKVI\\b',
-    'Her Majesty.s|His Majesty.s',
-  ),
-  ...sign(
-    'GB',
-    3,
-    '\\bNational Insurance\\b',
-    '\\bP60\\b',
-    '\\bP45\\b',
-    '\\bP11D\\b',
-    '\\bSA\\d{3}\\b',
-    '\\bPAYE\\b',
-    'Council Tax',
-    '\\bNHS\\b',
-    '\\bMOT\\b',
-    '\\bsort code\\b',
-    'registered in England',
-    'registered in Scotland',
-    '\\.co\\.uk\\b',
-    '\\.org\\.uk\\b',
-    '\\bOfgem\\b',
-    '\\bOfcom\\b',
-    'Great Britain',
-    '\\bMPAN\\b',
-    '\\bMPRN\\b',
-    'Borough Council',
-    'County Council',
-    'District Council',
-    'Parish Council',
-    '\\bHPI\\b',
-    'BACS',
-    'Consumer Credit Act',
-    'GMC\\b',
-    'Consumer Rights Act',
-    'Scotland|England|\\bWales\\b|Northern Ireland',
-  ),
-  ...sign(
-    'GB',
-    2,
-    '£',
-    '\\bGBP\\b',
-    '\\bVAT\\b',
-    '\\bGB ?\\d{3} ?\\d{4} ?\\d{2}\\b',
-    '\\b0(?:1\\d{3}|20|7\\d{3}|800|845|300) ?\\d{3}',
-    '\\+44',
-  ),
-  ...sign('GB', 1.5, '\\b[A-Z]{1,2}\\d[A-Z\\d]? ?\\d[A-Z]{2}\\b'),
-  ...sign(
-    'US',
-    6,
-    'Internal Revenue Service',
-    'Department of the Treasury',
-    '\\bIRS\\b',
-    'Social Security Administration',
-    'United States of America',
-    '\\bFDIC\\b',
-    '\\bSIPC\\b',
-    '\\bFINRA\\b',
-    'Department of Motor Vehicles',
-    '\\bUSCIS\\b',
-    'Medicare',
-    '\\bIRS\\.gov\\b',
-    '\\bHUD\\b',
-    'Department of Licensing',
-    'United States',
-  ),
-  ...sign(
-    'US',
-    3,
-    '\\bW-?2\\b',
-    '\\b1099(?:-[A-Z]+)?\\b',
-    '\\bForm 1040',
-    '\\b401\\(?k\\)?',
-    '\\bIRA\\b',
-    'Social Security number',
-    '\\bSSN\\b',
-    '\\bEIN\\b',
-    '\\bNotary Public\\b',
-    'County of [A-Z][a-z]+,? State of',
-    'State of (?:Washington|California|New York|Texas|Oregon|Florida|Ohio|Illinois|[A-Z][a-z]+)',
-    'routing number',
-    '\\bABA\\b',
-    '\\bHIPAA\\b',
-    '\\bCPT\\b',
-    'Equal Housing Lender',
-    "driver['’]?s license",
-    '\\bEOB\\b',
-    'Explanation of Benefits',
-    '\\bcheckbook\\b|\\bchecking\\b',
-    '\\bCounty Treasurer|County Assessor|County Auditor',
-  ),
-  ...sign(
-    'US',
-    2,
-    '\\b(?:A[KLRZ]|C[AOT]|D[CE]|FL|GA|HI|I[ADLN]|K[SY]|LA|M[ADEINOST]|N[CDEHJMVY]|O[HKR]|PA|RI|S[CD]|T[NX]|UT|V[AT]|W[AIVY])\\.? \\d{5}(?:-\\d{4})?\\b',
-    '\\bZIP\\b',
-    '\\bU\\.?S\\.? ?\\$',
-    '\\bUSD\\b',
-    'sales tax',
-    '\\b(?:1-)?\\(?[2-9]\\d{2}\\)? ?[- ]?555-\\d{4}',
-  ),
-  ...sign('US', 0.7, '\\$ ?\\d'),
-  ...sign('US', 0.8, '\\(\\d{3}\\) ?\\d{3}-\\d{4}'),
-  ...sign(
-    'CA',
-    6,
-    'Canada Revenue Agency',
-    'Agence du revenu',
-    'Canada Customs',
-    'Revenue Canada',
-    'Revenu Canada',
-    'Service Canada',
-    '\\bCRA\\b',
-    'Government of Canada',
-    'Gouvernement du Canada',
-    'Province of (?:British Columbia|Ontario|Alberta|Quebec|Manitoba|Saskatchewan|Nova Scotia)',
-    '\\bcanada\\.ca\\b',
-    '\\.gc\\.ca\\b',
-    'Supreme Court of British Columbia',
-    'Canadian Citizenship|Citizenship and Immigration|Citizenship Act',
-    '\\bICBC\\b',
-    'Canada Pension Plan|Old Age Security',
-    '\\bCDIC\\b',
-    'Employment and Social Development',
-  ),
-  ...sign(
-    'CA',
-    3,
-    '\\bCanada\\b',
-    '\\bCanadian\\b',
-    '\\bT4A?\\b',
-    '\\bT5\\b',
-    '\\bT1 General\\b',
-    '\\bRRSP\\b',
-    '\\bRRIF\\b',
-    '\\bTFSA\\b',
-    'social insurance (?:no|number)',
-    '\\bS\\.?I\\.?N\\.?\\b',
-    '\\bHST\\b',
-    'British Columbia|Ontario|Alberta|Québec|Quebec|Manitoba|Saskatchewan|Nova Scotia|New Brunswick|Newfoundland',
-    'transit (?:no|number)',
-    '\\bInterac\\b',
-    'registered charity',
-  ),
-  ...sign(
-    'CA',
-    2,
-    '\\b[ABCEGHJKLMNPRSTVXY]\\d[A-Z] ?\\d[A-Z]\\d\\b',
-    '\\bC\\$|\\bCAD\\b|\\bCDN\\b',
-    '\\.ca\\b',
-    '\\bG\\.?S\\.?T\\.?\\b',
-    '\\b(?:BC|ON|AB|QC|MB|SK|NS|NB|NL|PE) [A-Z]\\d',
-  ),
-  ...sign('CA', 0.5, '\\$ ?\\d'),
-  ...sign(
-    'AU',
-    6,
-    'Australian Taxation Office',
-    '\\bATO\\b',
-    '\\bAUSTRALIA\\b',
-    'Commonwealth of Australia',
-    'Services Australia',
-    'Centrelink',
-    '\\.gov\\.au\\b',
-    '\\bASIC\\b',
-    'myGov',
-    'Taxation Office',
-    'Revenue ?SA|Revenue NSW|State Revenue Office',
-    'Births, Deaths and Marriages',
-  ),
-  ...sign(
-    'AU',
-    3,
-    '\\bA\\.?B\\.?N\\.?\\b',
-    '\\bA\\.?C\\.?N\\.?\\b',
-    '\\bAustralian\\b',
-    'tax file number',
-    '\\bTFN\\b',
-    '\\bPAYG\\b',
-    'superannuation',
-    '\\bBSB\\b',
-    '\\bBPAY\\b',
-    '\\.com\\.au\\b',
-    '\\b(?:NSW|VIC|QLD|SA|WA|TAS|ACT|NT) \\d{4}\\b',
-    'South Australia|Western Australia|New South Wales|Queensland|Tasmania|Northern Territory',
-    '\\bGPO Box\\b',
-    'Medicare levy',
-    'residential tenancies',
-    'body corporate|strata',
-    '\\bNAT \\d{4}',
-  ),
-  ...sign(
-    'AU',
-    2,
-    '\\bA\\$|\\bAUD\\b',
-    '\\bGST\\b',
-    '\\(0[23478]\\) ?\\d{4} ?\\d{4}',
-    '\\b1[38]00 \\d{3} \\d{3}\\b',
-  ),
-  ...sign('AU', 0.4, '\\$ ?\\d'),
-  ...sign(
-    'IE',
-    6,
-    'Revenue Commissioners',
-    'Irish Tax and Customs',
-    'na h[ÉE]ireann',
-    '\\b[ÉE]ire\\b',
-    'Health Service Executive',
-    '\\bHSE\\b',
-    'Department of Social Protection',
-    '\\brevenue\\.ie\\b',
-    '\\.gov\\.ie\\b',
-    'Central Bank of Ireland',
-    'Road Safety Authority',
-    '\\bRSA\\b',
-    'Cáin agus Custaim',
-    'Republic of Ireland',
-    'An Post',
-    'Residential Tenancies Board',
-    'An tArd-Chl',
-  ),
-  ...sign(
-    'IE',
-    3,
-    '\\bIreland\\b',
-    '\\bIrish\\b',
-    '\\bPPS\\b',
-    '\\bPPSN\\b',
-    '\\bPRSI\\b',
-    '\\bUSC\\b',
-    '\\bUniversal Social Charge\\b',
-    '\\bEircode\\b',
-    '\\.ie\\b',
-    '\\bCo\\.? (?:Galway|Dublin|Cork|Kerry|Mayo|Clare|Limerick|Donegal|Sligo|Wicklow|Meath|Kildare|Louth|Wexford|Waterford|Tipperary|Kilkenny|Carlow|Laois|Offaly|Westmeath|Longford|Roscommon|Leitrim|Cavan|Monaghan)',
-    '\\b(?:Galway|Dublin|Cork|Limerick|Waterford)\\b',
-    '\\bP21\\b',
-    'Credit Union',
-    '\\bDIRT\\b',
-  ),
-  ...sign(
-    'IE',
-    1.5,
-    '€',
-    '\\bEUR\\b',
-    '\\bIBAN:? ?IE',
-    '\\b[ACDEFHKNPRTVWXY]\\d[\\dW] ?[A-Z0-9]{4}\\b',
-    '\\+353',
-  ),
-  ...sign(
-    'DE',
-    6,
-    'Finanzamt',
-    'Bundesrepublik',
-    'Bundeszentralamt',
-    'Rentenversicherung',
-    'Amtsgericht',
-    'Steuernummer',
-    'Landeshauptstadt',
-    'Krankenkasse',
-    'Bundesagentur',
-  ),
-  ...sign(
-    'DE',
-    3,
-    '\\bGmbH\\b',
-    '\\bUSt-?Id',
-    '\\bMwSt\\b',
-    'Umsatzsteuer',
-    '\\bRechnung\\b',
-    '\\bIBAN:? ?DE',
-    '\\bDeutschland\\b',
-    'Handelsregister',
-    'Sehr geehrte',
-    'Stra(?:ß|ss)e\\b',
-    'Bescheid',
-  ),
-  ...sign('DE', 1.5, '€', '\\bEUR\\b', '\\+49', '\\b\\d{5} [A-ZÄÖÜ][a-zäöüß]{3,}'),
-];
+/** Less than a hint, such as one spelling, names no country. */
+const leastEvidence = 1;
 
 export interface CountryFinding {
   country: string | null;
@@ -317,10 +15,14 @@ export interface CountryFinding {
 }
 
 /**
- * The issuer's country, null when the paper does not show it plainly. Every kind of sign counts at most
- * twice, so a page full of one currency does not outvote an authority's name.
+ * The issuer's country, null when the paper does not show it. Every kind of sign counts little more when
+ * it recurs, so a page full of one currency does not outvote an authority's name. The household's own
+ * country tips the scales where the paper leaves a doubt; it never speaks alone.
  */
-export function findCountry(lines: readonly PaperLine[]): CountryFinding {
+export function findCountry(
+  lines: readonly PaperLine[],
+  homeCountry: string | null = null,
+): CountryFinding {
   const text = lines.map((line) => line.text).join('\n');
   const scores: Record<string, number> = {};
   for (const { country, weight, pattern } of signs) {
@@ -328,9 +30,10 @@ export function findCountry(lines: readonly PaperLine[]): CountryFinding {
     if (hits === 0) continue;
     scores[country] = (scores[country] ?? 0) + weight * (hits > 1 ? 1.4 : 1);
   }
-  const ranked = Object.entries(scores).sort((a, b) => b[1] - a[1]);
+  const weigh = ([country, score]: [string, number]) => score + (country === homeCountry ? 1 : 0);
+  const ranked = Object.entries(scores).sort((a, b) => weigh(b) - weigh(a));
   const [best, second] = ranked;
-  if (!best || best[1] < 1.9) return { country: null, scores };
-  if (second && best[1] < second[1] * 1.15) return { country: null, scores };
+  if (!best || best[1] < leastEvidence) return { country: null, scores };
+  if (second && weigh(best) < weigh(second) * 1.05) return { country: null, scores };
   return { country: best[0], scores };
 }

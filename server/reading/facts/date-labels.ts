@@ -37,7 +37,9 @@ const groups: LabelGroup[] = [
       'bescheid vom',
       "date d['’ ]?(?:émission|emission|établissement)",
       'date de délivrance',
-      '4a',
+      '[4A]a',
+      'date of (?:the )?(?:grant|order|decree|decision|award|probate)',
+      'dated at [a-z ]{3,25} this(?: the)?',
     ],
   },
   {
@@ -48,7 +50,12 @@ const groups: LabelGroup[] = [
   {
     role: 'issued',
     strength: 0.7,
-    phrases: ['signed(?: and dated)?(?: on)?', 'registered(?: on)?', 'signature'],
+    phrases: [
+      'signed(?: and dated)?(?: on)?',
+      'registered(?: on)?',
+      'signature',
+      'held(?: on| at)?',
+    ],
   },
   { role: 'periodStart', strength: 0.95, isNear: true, phrases: ['from', 'between', 'du', 'vom'] },
   {
@@ -144,7 +151,10 @@ const groups: LabelGroup[] = [
       "date d['’ ]?expiration",
       'not valid after',
       'covered until',
-      '4b',
+      '[4A]b',
+      '(?:last|final) (?:day of (?:cover|term|tenancy)|date of cover)',
+      '(?:coverage|plan|protection|extended cover|registration|rego|season ticket|card|pass|visa|stay|your policy|current policy|term) (?:ends?|expires?|is valid until|valid until)(?: on)?',
+      '(?:expires|ends) with the',
     ],
   },
   {
@@ -166,6 +176,7 @@ const groups: LabelGroup[] = [
       '(?:first day|start date|commencement date|joining date|date of commencement|commencement of employment|date of hire|hire date|employment (?:start|began|commenced))(?: of (?:work|employment))?(?: on| is| will be)?',
       'paid (?:in full|off|out) (?:on|as of)',
       'trade date(?: and time)?',
+      '(?:acquired|acquisition)(?: of)?(?: vehicle)?(?: on| date)?',
       'work (?:carried out|completed|done)(?: on| between)?',
     ],
   },

@@ -62,18 +62,23 @@ function scoreByPlace(date: RoledDate, label: LabelSpot): number {
     if (gap < -0.01 || gap > 0.5) return 0;
     return label.strength * 0.97 - gap * 0.6;
   }
+  const dateX = findColumnEdge(date);
   const drop = date.box.y - (label.box.y + label.box.h);
   if (drop < -0.3 * height || drop > 2.4 * height) return 0;
-  const shared = overlap(
-    label.box.x,
-    label.box.x + label.box.w,
-    date.box.x,
-    date.box.x + date.box.w,
-  );
-  const leftEdges = Math.abs(label.box.x - date.box.x);
+  const shared = overlap(label.box.x, label.box.x + label.box.w, dateX, date.box.x + date.box.w);
+  const leftEdges = Math.abs(label.box.x - dateX);
   if (shared <= 0 && leftEdges > 0.02) return 0;
   const weak = label.end - label.start <= 4 && label.strength < 1 ? 0.1 : 0;
   return label.strength * 0.85 - Math.max(drop, 0) * 3 - Math.min(leftEdges, 0.2) * 0.6 - weak;
+}
+
+/** "Midnight on 30 June" hangs under its label with its first word. */
+function findColumnEdge(date: RoledDate): number {
+  const lead = date.line.text.slice(0, date.start);
+  const isShort = /^(?:\d{1,2}[:.]\d{2}\s*)?(?:midnight|noon|hours|hrs|[ap]m|on|at|\s)+$/i.test(
+    lead,
+  );
+  return isShort ? date.line.box.x : date.box.x;
 }
 
 /** A label at the end of the line before, when the date begins its line (running text). */
@@ -140,11 +145,20 @@ function assignRole(
         ? scoreSameLine(date, label, sameLine)
         : Math.max(scoreByPlace(date, label), scoreWrapped(date, label));
     if (score > date.strength && score > 0.2) {
-      date.strength = score;
-      date.role = label.role;
+      const isOther = namesAnotherPaper(label);
+      date.strength = isOther ? Math.max(score, 0.6) : score;
+      date.role = isOther ? 'other' : label.role;
       date.label = label.text;
     }
   }
+}
+
+const otherPaper =
+  /(?:^|\s)(?:the|my|your|our|an?|said|by|under|in|separation|tenancy|registered|previous|former)\s+(?:agreement|will|lease|deed|letter|order|charge|mortgage|contract|policy|transfer|conveyance|codicil)s?\s+(?:dated|made on|of)$/i;
+
+/** "the agreement dated 2 March 1993": the day of a paper that this one speaks of. */
+function namesAnotherPaper(label: LabelSpot): boolean {
+  return otherPaper.test(label.line.text.slice(0, label.end).trim());
 }
 
 function isInsideDate(label: LabelSpot, dates: readonly RoledDate[]): boolean {
@@ -208,7 +222,7 @@ function joinPairs(dates: RoledDate[]): void {
     if (!first || !second || first.value > second.value) continue;
     const between = first.line.text.slice(first.end, second.start);
     const joined =
-      /^[\s,.;]*(?:\d{1,2}[:.]\d{2}\s*(?:a\.?m\.?|p\.?m\.?)?\s*)?(?:to|through|thru|until|till|and|bis|au|-|–|—|up to|ending(?: on)?)(?:\s+(?:midnight|noon))?(?:\s+on)?[\s,.;]*$/i.test(
+      /^[\s,.;]*(?:\d{1,2}[:.]\d{2}\s*(?:a\.?m\.?|p\.?m\.?)?\s*)?(?:to|through|thru|until|till|(?:and\s)?(?:ends?|ending|expires|terminates)(?: on)?|and|bis|au|-|–|—|up to)(?:\s+(?:midnight|noon))?(?:\s+on)?[\s,.;]*$/i.test(
         between,
       ) ||
       (first.range === 'from' && second.range === 'to');

@@ -13,6 +13,7 @@ type KeyKind = 'expiry' | 'cover' | 'period' | 'issue' | 'event' | 'none';
 const kinds: Partial<Record<ClassId, KeyKind>> = {
   passport: 'expiry',
   'driving-licence': 'expiry',
+  'vehicle-registration': 'expiry',
   'immigration-paper': 'expiry',
   'insurance-policy': 'cover',
   warranty: 'cover',

@@ -23,6 +23,20 @@ addMonths([
   ['december', 'dec'],
 ]);
 addMonths([
+  ['eanáir', 'eanair', 'ean'],
+  ['feabhra', 'feabh', 'feab'],
+  ['márta', 'marta'],
+  ['aibreán', 'aibrean', 'aib'],
+  ['bealtaine', 'beal'],
+  ['meitheamh', 'meith'],
+  ['iúil', 'iuil'],
+  ['lúnasa', 'lunasa'],
+  ['meán fómhair'],
+  ['deireadh fómhair'],
+  ['samhain', 'samh'],
+  ['nollaig', 'noll'],
+]);
+addMonths([
   ['januar', 'jänner'],
   ['februar'],
   ['märz', 'maerz', 'marz'],

@@ -48,7 +48,7 @@ const patterns = {
     'g',
   ),
   dayMonthYear: new RegExp(
-    `${before}${day}[\\s-]*(?:day\\s+)?(?:of\\s+)?${month}(?:\\s?/\\s?[A-Za-zÀ-ÿ]{3,9}\\.?)?${sep}-?\\s?${year}${after}`,
+    `${before}${day}[\\s-]*(?:day\\s+)?(?:of\\s*)?${month}(?:\\s?/\\s?[A-Za-zÀ-ÿ]{3,9}\\.?)?${sep}-?\\s?${year}${after}`,
     'gi',
   ),
   monthDayYear: new RegExp(
@@ -65,7 +65,7 @@ const patterns = {
     'gi',
   ),
   words:
-    /((?:twenty|thirty)?[\s-]?[a-z]{2,11}(?:st|nd|rd|th))\s+day\s+of\s+([A-Za-z]{3,9}),?\s+(?:in the year\s+)?(?:of our Lord\s+)?(?:A\.?\s?D\.?\s+)?((?:[12]\d{3})|(?:(?:one|two|nineteen|twenty)[\sA-Za-z-]{0,40}))/gi,
+    /\b((?:(?:twenty|thirty)[\s-])?[a-z]{2,11}(?:st|nd|rd|th))\s+(?:day\s+)?(?:of\s*)?([A-Za-z]{3,9}),?\s+(?:in the year\s+)?(?:of our Lord\s+)?(?:A\.?\s?D\.?\s+)?((?:[12]\d{3})|(?:(?:one|two|nineteen|twenty)[\sA-Za-z-]{0,40}))/gi,
   monthYear: new RegExp(
     `(?<![A-Za-z0-9]|(?:^|[\\s(])\\d{1,2} )([A-Za-zÀ-ÿ]{3,10})\\.?,?\\s+((?:19|20)\\d{2})(?![\\d/-]\\d|\\d)`,
     'g',
@@ -96,13 +96,20 @@ interface Found {
   range?: PrintedDate['range'];
 }
 
+/** A slashed zero is read as 6, 8 or 9: 61 stands for 01. */
+function healLeadingZero(number: number): number {
+  return number > 60 && number < 100 ? number % 10 : number;
+}
+
 /** Day and month in the order that is possible, else in the paper's. */
 function decideDayMonth(
-  first: number,
-  second: number,
+  firstPrinted: number,
+  secondPrinted: number,
   yearNumber: number,
   dayFirst: boolean,
 ): { value: IsoDate | null; ambiguous: boolean } {
+  const first = healLeadingZero(firstPrinted);
+  const second = healLeadingZero(secondPrinted);
   const asDayFirst = findIsoDate(yearNumber, second, first);
   const asMonthFirst = findIsoDate(yearNumber, first, second);
   const preferred = dayFirst ? asDayFirst : asMonthFirst;

@@ -2,7 +2,8 @@
 import type { ClassId } from '../../contract/document-classes.ts';
 import type { IsoDate } from '../../contract/dates.ts';
 import type { DateFact, DateRole, Facts } from '../../contract/readings.ts';
-import { addDays, addMonths, countDaysInMonth, dayNumber, splitIsoDate } from './calendar-days.ts';
+import { countDaysInMonth, dayNumber, splitIsoDate } from './calendar-days.ts';
+import { addTermDays, addWarrantyEnd, implied, round } from './implied-dates.ts';
 import type { RoledDate } from './date-roles.ts';
 import { isPeriodClass } from './key-date.ts';
 import { findYearlessRange } from './parse-dates.ts';
@@ -32,6 +33,7 @@ const taxYearClasses: ReadonlySet<string> = new Set<ClassId>([
   'pension-statement',
   'benefit-award',
   'payslip',
+  'mortgage-statement',
 ]);
 
 /** Yearly slips that print nothing but the year. */
@@ -63,26 +65,21 @@ const oneDay: ReadonlySet<string> = new Set<ClassId>([
   'marriage-certificate',
 ]);
 
+/** A month without a day ends a period or a term with its last day. */
+function findDay(date: RoledDate): IsoDate {
+  if (date.precision !== 'month') return date.value;
+  if (date.role !== 'periodEnd' && date.role !== 'expiry') return date.value;
+  const { year, month } = splitIsoDate(date.value);
+  return `${year}-${pad(month)}-${pad(countDaysInMonth(year, month))}`;
+}
+
 function toFact(date: RoledDate, confidence: number): DateFact {
   return {
-    value: date.value,
+    value: findDay(date),
     confidence: round(confidence * letterConfidence(date.line, date.start, date.end)),
     seenAt: { page: date.line.page, box: date.box },
     printed: date.printed,
   };
-}
-
-function implied(value: IsoDate, from: DateFact | null, confidence = 0.6): DateFact {
-  return {
-    value,
-    confidence: round(Math.min(confidence, from?.confidence ?? 1)),
-    seenAt: from?.seenAt ?? null,
-    printed: from?.printed ?? null,
-  };
-}
-
-function round(value: number): number {
-  return Math.round(Math.max(0, Math.min(1, value)) * 1000) / 1000;
 }
 
 /** How well a date answers a role: the label, then an early place on an early page. */
@@ -131,7 +128,7 @@ function markRecordingStamp(dates: RoledDate[]): void {
   const stamp = dates.find(
     (date) =>
       date.line.page === 1 &&
-      date.box.y < 0.25 &&
+      (date.box.y < 0.25 || /record|filed/i.test(date.label ?? '')) &&
       (date.role === null || date.role === 'issued') &&
       /\d{1,2}:\d{2}|record|register|filed|stamp/i.test(date.line.text),
   );
@@ -166,14 +163,36 @@ function markEventsInText(dates: RoledDate[], lines: readonly PaperLine[], class
     const before = lines[date.line.index - 1];
     const lead = before && before.page === date.line.page ? before.text : '';
     if (!words.test(date.line.text) && !words.test(lead)) continue;
+    const just = date.line.text.slice(Math.max(0, date.start - 40), date.start);
+    if (/(?:registered|recorded|dated|made|opened|granted)\b[^.]*$/i.test(just)) continue;
     date.role = 'eventDate';
     date.strength = words.test(date.line.text) ? 0.8 : 0.6;
   }
 }
 
+/** A certificate is as old as its making out, not as the entry that it copies. */
+function markCertifiedDay(dates: RoledDate[]): void {
+  for (const date of dates) {
+    if (date.role === 'issued' && /regist/i.test(date.label ?? '')) date.strength -= 0.1;
+  }
+}
+
+/** A loan runs to its last payment. */
+function markLastPayment(dates: RoledDate[]): void {
+  for (const date of dates) {
+    const lead = date.line.text.slice(0, date.start);
+    if (!/\b(?:last|final)\s+(?:re)?(?:payment|instal+ment)[^.]{0,25}$/i.test(lead)) continue;
+    date.role = 'expiry';
+    date.strength = 1;
+  }
+}
+
 /** A date without a label that reads as the paper's own: alone near the top, else alone, else the first. */
 function pickUnlabelled(dates: readonly RoledDate[]): RoledDate | null {
-  const free = dates.filter((date) => date.role === null && !date.isRow);
+  const free = dates.filter(
+    (date) =>
+      (date.role === null || (date.role === 'other' && date.strength <= 0.5)) && !date.isRow,
+  );
   const days = free.filter((date) => date.precision === 'day');
   const top = days.find((date) => date.alone && date.line.page === 1 && date.box.y < 0.5);
   const first = days.find((date) => date.line.page === 1);
@@ -238,8 +257,10 @@ export function resolveDates(
       : { ...date },
   );
   markLetterDates(usable, classId);
+  if (classId === 'birth-certificate') markCertifiedDay(usable);
   if (classId === 'property-deed') markRecordingStamp(usable);
   markEventsInText(usable, lines, classId);
+  if (classId === 'loan-agreement') markLastPayment(usable);
   const [start, end] = pickPeriod(usable);
   const dates: Dates = {
     issued: factOf(pickBest(usable, 'issued')),
@@ -280,12 +301,26 @@ function decideTaxYear(
   const printed = findPrintedTaxYear(lines, country);
   if (printed && classId !== 'payslip') return printed;
   if (classId === 'payslip') return dates.issued ? taxYearOf(dates.issued.value, country) : printed;
-  if (yearlySlips.has(classId) && country !== 'GB' && country !== 'AU') {
-    const lone = findLoneYear(lines);
+  if (country !== 'GB' && country !== 'AU') {
+    const lone = findYearlyTitle(lines, classId);
     if (lone) return lone;
   }
   if (dates.periodEnd && isPeriodClass(classId)) return taxYearOf(dates.periodEnd.value, country);
   return null;
+}
+
+/** The year on a form that is made out once a year, where nothing else names it. */
+function findYearlyTitle(lines: readonly PaperLine[], classId: string): string | null {
+  if (yearlySlips.has(classId)) return findLoneYear(lines);
+  const forms: Partial<Record<string, RegExp>> = {
+    'mortgage-statement': /\b1098\b|interest statement/i,
+    'payroll-record': /form|return|quarter/i,
+    'property-tax-bill': /tax/i,
+    'pension-statement': /\b5498\b/,
+  };
+  const pattern = forms[classId];
+  if (!pattern) return null;
+  return findLoneYear(lines.filter((line) => pattern.test(line.text)));
 }
 
 function addImplied(
@@ -320,53 +355,4 @@ function addImplied(
   if (oneDay.has(classId)) dates.issued ??= dates.eventDate;
   if (!dates.due && dates.issued) addTermDays(dates, lines, dates.issued);
   if (classId === 'warranty' && !dates.expiry) addWarrantyEnd(dates, lines);
-}
-
-/** "Payment within 30 days" counted from the date of the paper. */
-function addTermDays(dates: Dates, lines: readonly PaperLine[], issued: DateFact): void {
-  for (const line of lines) {
-    const match =
-      /(?:within|net|terms:?|payable in|payment in)\s+(\d{1,2})\s*days|(\d{1,2})\s*days\s+(?:net|from (?:the )?(?:invoice|date))/i.exec(
-        line.text,
-      );
-    const days = Number(match?.[1] ?? match?.[2]);
-    if (!match || !/pay|terms|net|invoice|due|zahl/i.test(line.text) || !(days > 0)) continue;
-    dates.due = {
-      ...implied(addDays(issued.value, days), null, 0.5),
-      seenAt: { page: line.page, box: line.box },
-      printed: match[0],
-    };
-    return;
-  }
-}
-
-const yearCounts: Record<string, number> = {
-  one: 1,
-  two: 2,
-  three: 3,
-  four: 4,
-  five: 5,
-  six: 6,
-  seven: 7,
-  eight: 8,
-  ten: 10,
-};
-
-/** A guarantee of so many years or months runs from the purchase or installation; the last day is the day before. */
-function addWarrantyEnd(dates: Dates, lines: readonly PaperLine[]): void {
-  const from = dates.eventDate ?? dates.periodStart ?? dates.issued;
-  if (!from) return;
-  for (const line of lines) {
-    const match =
-      /\b(\d{1,2}|one|two|three|four|five|six|seven|eight|ten)[ -](year|month)s?\b/i.exec(
-        line.text,
-      );
-    if (!match || !/guarantee|warrant|cover|parts/i.test(line.text)) continue;
-    const word = (match[1] ?? '').toLowerCase();
-    const count = yearCounts[word] ?? Number(word);
-    const months = /month/i.test(match[2] ?? '') ? count : count * 12;
-    if (!(months > 0) || months > 480) continue;
-    dates.expiry = implied(addDays(addMonths(from.value, months), -1), from, 0.5);
-    return;
-  }
 }
