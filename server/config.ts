@@ -47,7 +47,7 @@ const environmentSchema = z.object({
   MAX_PAGES: whole(1, 5000, 300),
   MAX_PIXELS: whole(10_000, 1_000_000_000, 120_000_000),
   PAGE_TIMEOUT_MS: whole(1000, 600_000, 90_000),
-  READER_MEMORY_MB: whole(128, 65_536, 1500),
+  READER_MEMORY_MB: whole(64, 65_536, 1500),
   CLASS_CONFIDENCE: z
     .string()
     .regex(/^(0(\.\d+)?|1(\.0+)?)$/, 'must be a number from 0 to 1')

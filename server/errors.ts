@@ -101,6 +101,12 @@ export class TooManyError extends ApplicationError {
   readonly title = 'Too many attempts';
 }
 
+/** The disk of the server is full. */
+export class StorageFullError extends ApplicationError {
+  readonly status = 507;
+  readonly title = 'No room left';
+}
+
 export class TooLargeError extends ApplicationError {
   readonly status = 413;
   readonly title = 'Too large';

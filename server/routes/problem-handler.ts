@@ -2,7 +2,7 @@
 import type { ErrorRequestHandler, Response } from 'express';
 import multer from 'multer';
 import type { Problem } from '../contract/problems.ts';
-import { ApplicationError, BadRequestError, TooLargeError } from '../errors.ts';
+import { ApplicationError, BadRequestError, StorageFullError, TooLargeError } from '../errors.ts';
 import type { Logger } from '../log.ts';
 
 /** Answers with problem details; unexpected failures are logged and answered with a plain 500. */
@@ -37,6 +37,10 @@ export function sendProblem(response: Response, problem: Problem): void {
   response.status(problem.status).type('application/problem+json').send(JSON.stringify(problem));
 }
 
+/** What the parser of uploads says of a request that is not one. */
+const brokenForm =
+  /^(Malformed (part header|content type)|Unexpected end of (form|file)|Multipart: |Missing Content-Type|Unsupported content type|Request (aborted|closed))/;
+
 function translate(error: unknown): ApplicationError | null {
   if (error instanceof multer.MulterError) {
     if (error.code === 'LIMIT_FILE_SIZE') {
@@ -50,7 +54,18 @@ function translate(error: unknown): ApplicationError | null {
         : 'The upload could not be read. Send the files in the field "files".',
     );
   }
-  if (!(error instanceof Error) || !('status' in error)) return null;
+  if (!(error instanceof Error)) return null;
+  if ('code' in error && error.code === 'ENOSPC') {
+    return new StorageFullError(
+      'The disk of the server is full and nothing was stored. Ask whoever runs it to make room.',
+    );
+  }
+  if (brokenForm.test(error.message)) {
+    return new BadRequestError(
+      'The upload broke off or is not well-formed. Send the files again, in the field "files".',
+    );
+  }
+  if (!('status' in error)) return null;
   if (error.status === 400) return new BadRequestError('The request is not readable JSON.');
   if (error.status === 413) return new TooLargeError('The request is too large.');
   return null;

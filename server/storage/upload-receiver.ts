@@ -58,6 +58,8 @@ export function createUploadReceiver(
     storage: engine,
     // Without it a name in UTF-8 arrives as Latin-1.
     defParamCharset: 'utf8',
+    // Names arrive whole and are made harmless here: otherwise a file called ".." would be passed over.
+    preservePath: true,
     limits: { files: limits.maxFiles, fields: 10, fieldSize: 1000, parts: limits.maxFiles + 10 },
   }).array('files');
 }

@@ -42,6 +42,8 @@ export interface Visitor {
   delete(url: string, version?: number): request.Test;
   agent: ReturnType<typeof request.agent>;
   csrfToken: string;
+  /** The session's cookie, for requests that the agent cannot make. */
+  cookie(): string;
 }
 
 /** The day on which tests play unless they say otherwise. */
@@ -82,7 +84,7 @@ export async function startTestApp(options: TestAppOptions = {}): Promise<TestAp
     log: silentLog,
     database,
     ruleSet: loadRuleTables(),
-    storage: openScanStorage(uploadsDir),
+    storage: openScanStorage(config.uploadsDir),
     queue,
   };
   const built = createApp(deps);
@@ -122,6 +124,10 @@ function withToken(agent: ReturnType<typeof request.agent>, csrfToken: string): 
   return {
     agent,
     csrfToken,
+    cookie: () =>
+      agent.jar
+        .getCookies({ path: '/', domain: '127.0.0.1', secure: false, script: false })
+        .toValueString(),
     get: (url) => agent.get(url),
     post: (url, body = {}) => change(agent.post(url)).send(body),
     put: (url, body = {}) => change(agent.put(url)).send(body),

@@ -8,6 +8,8 @@ export interface ReadingLimits {
   maxBytes: number;
   /** Time for one page, in milliseconds, before it is given up. */
   pageTimeoutMs: number;
+  /** Memory that one page may take on top of what was in use, in megabytes, before it is given up. */
+  pageMemoryMb: number;
 }
 
 export const defaultReadingLimits: ReadingLimits = {
@@ -15,6 +17,7 @@ export const defaultReadingLimits: ReadingLimits = {
   maxPixels: 130_000_000,
   maxBytes: 100 * 1024 * 1024,
   pageTimeoutMs: 90_000,
+  pageMemoryMb: 1500,
 };
 
 /** The defaults with what the caller wants otherwise. */
@@ -28,11 +31,13 @@ export function readingLimitsOf(settings: {
   maxPixels: number;
   maxFileBytes: number;
   pageTimeoutMs: number;
+  readerMemoryMb: number;
 }): ReadingLimits {
   return {
     maxPages: settings.maxPages,
     maxPixels: settings.maxPixels,
     maxBytes: settings.maxFileBytes,
     pageTimeoutMs: settings.pageTimeoutMs,
+    pageMemoryMb: settings.readerMemoryMb,
   };
 }

@@ -11,7 +11,13 @@ import { UnreadableFileError } from './unreadable-file-error.ts';
 
 /** The engine's memory never shrinks: a thread is replaced after this many tasks. */
 const TASKS_PER_THREAD = 300;
-const HEAP_MB = 1024;
+/** How often the memory of a page under way is looked at. */
+const MEMORY_LOOK_MS = 200;
+const MEGABYTE = 1024 * 1024;
+
+const tooMuchMemory = 'This page needed more memory than it may have. Scan it at 200 to 300 dpi.';
+const tooMuchTime =
+  'This page took too long to read and was given up. Scan it again, at 200 to 300 dpi.';
 
 export interface ThreadPoolOptions extends ThreadSettings {
   threads: number;
@@ -38,6 +44,8 @@ interface Thread {
   worker: Worker;
   job: Job | null;
   timer: NodeJS.Timeout | null;
+  /** Looks at the memory of the task under way. */
+  watch: NodeJS.Timeout | null;
   done: number;
 }
 
@@ -52,9 +60,9 @@ export function createThreadPool(options: ThreadPoolOptions): ThreadPool {
     const worker = new Worker(new URL('./page-thread.mjs', import.meta.url), {
       workerData: { limits: options.limits, modelFolder: options.modelFolder },
       execArgv: [],
-      resourceLimits: { maxOldGenerationSizeMb: HEAP_MB },
+      resourceLimits: { maxOldGenerationSizeMb: options.limits.pageMemoryMb },
     });
-    const thread: Thread = { worker, job: null, timer: null, done: 0 };
+    const thread: Thread = { worker, job: null, timer: null, watch: null, done: 0 };
     worker.on('message', (message: ThreadReply) => receive(thread, message));
     worker.on('error', (error) => lose(thread, error));
     worker.on('exit', () => lose(thread, null));
@@ -78,7 +86,9 @@ export function createThreadPool(options: ThreadPoolOptions): ThreadPool {
 
   function release(thread: Thread): void {
     if (thread.timer) clearTimeout(thread.timer);
+    if (thread.watch) clearInterval(thread.watch);
     thread.timer = null;
+    thread.watch = null;
     thread.job = null;
   }
 
@@ -94,25 +104,25 @@ export function createThreadPool(options: ThreadPoolOptions): ThreadPool {
     endThread(thread);
     if (job) {
       options.onFault?.(error?.stack ?? 'A page thread ended by itself.');
-      job.reject(
-        new UnreadableFileError(
-          'This page needed more memory than it may have. Scan it at 200 to 300 dpi.',
-        ),
-      );
+      job.reject(new UnreadableFileError(tooMuchMemory));
     }
     assign();
   }
 
-  function giveUp(thread: Thread): void {
+  function giveUp(thread: Thread, sentence: string): void {
     const { job } = thread;
     release(thread);
     endThread(thread);
-    job?.reject(
-      new UnreadableFileError(
-        'This page took too long to read and was given up. Scan it again, at 200 to 300 dpi.',
-      ),
-    );
+    job?.reject(new UnreadableFileError(sentence));
     assign();
+  }
+
+  /** The engine and the decoders take memory that no heap limit counts: what the process takes is looked at. */
+  function watchMemory(thread: Thread): NodeJS.Timeout {
+    const most = process.memoryUsage.rss() + options.limits.pageMemoryMb * MEGABYTE;
+    return setInterval(() => {
+      if (process.memoryUsage.rss() > most) giveUp(thread, tooMuchMemory);
+    }, MEMORY_LOOK_MS);
   }
 
   function assign(): void {
@@ -121,7 +131,8 @@ export function createThreadPool(options: ThreadPoolOptions): ThreadPool {
       const job = thread && waiting.shift();
       if (!thread || !job) return;
       thread.job = job;
-      thread.timer = setTimeout(() => giveUp(thread), options.limits.pageTimeoutMs);
+      thread.timer = setTimeout(() => giveUp(thread, tooMuchTime), options.limits.pageTimeoutMs);
+      thread.watch = watchMemory(thread);
       send(thread, { type: 'task', id: job.id, task: job.task });
     }
   }
