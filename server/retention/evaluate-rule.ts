@@ -23,7 +23,22 @@ function keepNothing(scene: Scene): Outcome {
 
 type TriggeredKeep = Exclude<Keep, { how: 'permanent' | 'none' | 'owner-decides' | 'open' }>;
 
-function evaluateTriggered(rule: Rule, keep: TriggeredKeep, scene: Scene): Outcome {
+/**
+ * The return that tells of a sale is not filed before it: an earlier filing day is another year's, so that of this
+ * year is not known.
+ */
+function withoutEarlierFiling(keep: TriggeredKeep, scene: Scene): Scene {
+  const event = keep.waitsFor ? scene.inputs[keep.waitsFor] : null;
+  const filing = keep.how === 'return-window' ? 'filedOn' : 'filing' in keep ? keep.filing : null;
+  if (!event || !filing) return scene;
+  const filed = scene.inputs[filing];
+  if (!filed || filed >= event) return scene;
+  const { [filing]: _earlier, ...inputs } = scene.inputs;
+  return { ...scene, inputs };
+}
+
+function evaluateTriggered(rule: Rule, keep: TriggeredKeep, given: Scene): Outcome {
+  const scene = withoutEarlierFiling(keep, given);
   const trigger = findTrigger(keep, scene);
   if (keep.how === 'filing-start') {
     // Waiting for an event stands before the return; a missing year does not when the due day is given.

@@ -30,7 +30,8 @@ export function describeHandling(
   };
   for (const { rule } of says) {
     if (rule.disposal) disposal = rule.disposal;
-    if (originalRank[rule.original] > originalRank[original]) original = rule.original;
+    const needed = rule.originalFor?.[retentionCase.class] ?? rule.original;
+    if (originalRank[needed] > originalRank[original]) original = needed;
     if (rule.originalCondition) add(rule.originalCondition);
     for (const caution of rule.cautions) add(caution);
   }

@@ -35,6 +35,8 @@ function listDistrictOfColumbia(year: number): Set<IsoDate> {
     observeNearby(makeDay(year + 1, 1, 1)),
     findNthWeekday(year, 1, 1, 3),
     findNthWeekday(year, 2, 1, 3),
+    // Emancipation Day, a legal holiday of the District since 2005; counted before as well, which is longer.
+    observeNearby(makeDay(year, 4, 16)),
     findNthWeekday(year, 5, 1, -1),
     observeNearby(makeDay(year, 7, 4)),
     findNthWeekday(year, 9, 1, 1),
@@ -43,8 +45,6 @@ function listDistrictOfColumbia(year: number): Set<IsoDate> {
     findNthWeekday(year, 11, 4, 4),
     observeNearby(makeDay(year, 12, 25)),
   ];
-  // Emancipation Day has been a legal holiday of the District since 2005.
-  if (year >= 2005) days.push(observeNearby(makeDay(year, 4, 16)));
   if (year >= 2021) days.push(observeNearby(makeDay(year, 6, 19)));
   // Inauguration day, after a presidential election; on a Sunday it is held on the Monday.
   if (year >= 1937 && year % 4 === 1) days.push(observeNearby(makeDay(year, 1, 20)));

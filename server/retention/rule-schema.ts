@@ -260,6 +260,8 @@ export const ruleSchema = z.strictObject({
   disposal: z.enum(disposals).optional(),
   original: z.enum(originals).default('scan-is-enough'),
   originalCondition: sentence.optional(),
+  /** Classes of the rule for which it is otherwise. */
+  originalFor: z.partialRecord(classIdSchema, z.enum(originals)).optional(),
   cautions: z.array(sentence).default([]),
   advised: z.array(advisedSchema).default([]),
   basis: basisSchema,

@@ -94,6 +94,20 @@ describe('returns', () => {
     );
   });
 
+  it('takes no return for that of a sale that came after it', () => {
+    const invoice = {
+      role: 'individual',
+      invoiceDate: '2011-05-20',
+      disposedOn: '2024-08-09',
+    } as const;
+    for (const country of ['US', 'CA', 'GB']) {
+      const filed = (filedOn: string) =>
+        ask(country, 'home-improvement-invoice', { ...invoice, filedOn });
+      expect(filed('2012-04-10'), country).toMatchObject({ open: true, keepUntil: null });
+      expect(filed('2025-04-10').open, country).toBe(false);
+    }
+  });
+
   it('is permanent after a fraudulent US return even when none was filed', () => {
     const inputs = {
       role: 'self-employed',
@@ -285,6 +299,18 @@ describe('the answer', () => {
     expect(bill('2024-03-08')).toBe('2031-03-31');
     expect(bill('2024-03-31')).toBe('2030-03-31');
     expect(bill('2024-04-01')).toBe('2031-03-31');
+  });
+
+  it('asks for the original by the class where a rule is for several', () => {
+    const sold = { role: 'individual', disposedOn: '2023-06-06', filedOn: '2024-03-03' } as const;
+    expect(ask('US', 'property-deed', sold).original).toBe('required');
+    expect(ask('US', 'trade-note', sold).original).toBe('conditional');
+    expect(ask('DE', 'business-accounts', { documentKind: 'annual-accounts' }).original).toBe(
+      'required',
+    );
+    expect(ask('DE', 'business-accounts', { documentKind: 'ledger' }).original).toBe(
+      'scan-is-enough',
+    );
   });
 
   it('names places that do not exist', () => {

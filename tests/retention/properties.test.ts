@@ -264,6 +264,9 @@ describe('any case', () => {
         const isYear = /YearEnd$|^disposedOn$|^transactionCompletedOn$|^valuationDate$/.test(name);
         if (isYear && (given.filedOn ?? given.returnDeliveredOn ?? given.returnReceivedOn)) return;
         if (name === 'financialYearEnd' && given.transactionCompletedOn) return;
+        // Filed before the sale, it was another year's return.
+        const sold = given.disposedOn ?? given.endedOn;
+        if (/^(filed|lodged|returnDelivered)On$/.test(name) && sold && value < sold) return;
         // An American return amended after its period has ended changes nothing any more.
         if (name.startsWith('amended') && country === 'US') return;
         const known = rank(assess(retentionCase, ruleSet));
