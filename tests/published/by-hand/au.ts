@@ -233,6 +233,12 @@ export const auHand: HandCases[] = [
         { ...person, documentKind: 'fund-accounts', financialYearEnd: '2019-06-30' },
         '2024-06-30',
       ],
+      [
+        'mortgage running',
+        'mortgage-statement',
+        { ...nsw, documentDate: '2015-12-31', endedOn: null },
+        'open',
+      ],
       ['utility bill', 'utility-bill', { ...nsw, documentDate: '2020-01-05' }, '2026-01-05'],
       [
         'utility bill in the Northern Territory',

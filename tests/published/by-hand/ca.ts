@@ -313,6 +313,18 @@ export const caHand: HandCases[] = [
     country: 'CA',
     source: 'Limitations Act, 2002 (Ont.) ss.4, 5, 15 and those of other provinces',
     cases: [
+      [
+        'mortgage running',
+        'mortgage-statement',
+        { ...ontario, documentDate: '2015-12-31', endedOn: null },
+        'open',
+      ],
+      [
+        'mortgage paid off',
+        'mortgage-statement',
+        { ...ontario, documentDate: '2015-12-31', endedOn: '2023-05-31' },
+        '2025-05-31',
+      ],
       ['lease ended', 'tenancy-agreement', { ...ontario, endedOn: '2022-08-31' }, '2024-08-31'],
       [
         'card statement of 29 February',

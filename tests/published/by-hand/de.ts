@@ -111,6 +111,17 @@ export const deHand: HandCases[] = [
     source: 'UStG §14b(1) S. 5; BGB §634a',
     cases: [
       [
+        'garden of a self-employed person',
+        'home-improvement-invoice',
+        {
+          role: 'self-employed',
+          usedForTax: false,
+          buildingWork: false,
+          invoiceDate: '2023-11-08',
+        },
+        '2025-12-31',
+      ],
+      [
         'building work accepted',
         'home-improvement-invoice',
         { ...home, invoiceDate: '2020-06-06', buildingWork: true, acceptedOn: '2020-07-01' },
