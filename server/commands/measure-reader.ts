@@ -10,6 +10,12 @@ import { describeReadingError } from '../reading/pages/unreadable-file-error.ts'
 import { readPapers } from '../reading/papers.ts';
 import type { PageText } from '../reading/types.ts';
 import {
+  addPaper,
+  scoreDuplicates,
+  startDuplicateCheck,
+  type DuplicateCheck,
+} from './measuring/score-duplicates.ts';
+import {
   scoreBoundaries,
   scorePaper,
   scoreWords,
@@ -47,6 +53,11 @@ function parseSettings(args: string[]): Settings {
   return { truthFile, only: values.only ?? null, limit, showMistakes: values.mistakes };
 }
 
+interface Measured {
+  scores: Scores;
+  copies: DuplicateCheck;
+}
+
 async function readPages(reader: PageReader, file: string): Promise<PageText[]> {
   const opened = await reader.open(await readFile(file));
   try {
@@ -58,16 +69,28 @@ async function readPages(reader: PageReader, file: string): Promise<PageText[]> 
   }
 }
 
-function scoreDocument(scores: Scores, document: TrueDocument, pages: PageText[], country: string) {
+function scoreDocument(
+  { scores, copies }: Measured,
+  document: TrueDocument,
+  pages: PageText[],
+  country: string,
+) {
   const readings = readPapers(pages, { country });
   scorePaper(scores, document.file, document.quality, document, readings[0] ?? null);
   if (readings.length > 1) {
     scores.mistakes.push(`${document.file}: one paper, read as ${readings.length}`);
   }
   scoreWords(scores, document.quality, document, pages);
+  const { file, household, duplicateOf } = document;
+  addPaper(copies, file, household, pages, readings[0] ?? null, duplicateOf);
 }
 
-function scoreStack(scores: Scores, stack: TrueStack, pages: PageText[], country: string) {
+function scoreStack(
+  { scores, copies }: Measured,
+  stack: TrueStack,
+  pages: PageText[],
+  country: string,
+) {
   const readings = readPapers(pages, { country });
   scoreBoundaries(scores, stack, readings);
   const quality = `pile ${stack.quality}`;
@@ -76,11 +99,14 @@ function scoreStack(scores: Scores, stack: TrueStack, pages: PageText[], country
     scorePaper(scores, `${stack.file} page ${paper.from}`, quality, paper, reading);
     const own = pages.filter((page) => page.number >= paper.from && page.number <= paper.to);
     scoreWords(scores, quality, paper, own);
+    const name = `${stack.file}#${paper.from}`;
+    addPaper(copies, name, stack.household, own, reading, paper.duplicateOf);
   }
 }
 
-async function measure(settings: Settings, truth: Truth): Promise<Scores> {
-  const scores = startScores();
+async function measure(settings: Settings, truth: Truth): Promise<Measured> {
+  const measured: Measured = { scores: startScores(), copies: startDuplicateCheck() };
+  const { scores } = measured;
   const folder = path.dirname(settings.truthFile);
   const items = [...truth.documents, ...truth.stacks]
     .filter((item) => settings.only === null || item.quality === settings.only)
@@ -95,8 +121,8 @@ async function measure(settings: Settings, truth: Truth): Promise<Scores> {
         const pages = await readPages(reader, path.join(folder, item.file));
         pageCount += pages.length;
         const country = truth.households[item.household]?.country ?? 'GB';
-        if ('documents' in item) scoreStack(scores, item, pages, country);
-        else scoreDocument(scores, item, pages, country);
+        if ('documents' in item) scoreStack(measured, item, pages, country);
+        else scoreDocument(measured, item, pages, country);
       } catch (error) {
         scores.mistakes.push(`${item.file}: ${describeReadingError(error)}`);
         if (!('documents' in item)) scorePaper(scores, item.file, item.quality, item, null);
@@ -108,7 +134,7 @@ async function measure(settings: Settings, truth: Truth): Promise<Scores> {
   await reader.close();
   const seconds = (performance.now() - startedAt) / 1000;
   print(`${items.length} files, ${pageCount} pages, ${seconds.toFixed(0)} s`);
-  return scores;
+  return measured;
 }
 
 function print(line: string): void {
@@ -128,7 +154,19 @@ function printTally(title: string, tally: Tally): void {
   if (tally.counts.size > 1) print(`  ${'all'.padEnd(26)} ${describeCount({ right, of })}`);
 }
 
-function printScores(scores: Scores, showMistakes: boolean): void {
+function printDuplicates(copies: DuplicateCheck, scores: Scores): void {
+  const { right, wanted, falsePairs, missed } = scoreDuplicates(copies);
+  if (wanted === 0 && falsePairs.length === 0) return;
+  print('\nCopies of one paper within a household');
+  print(`  ${'found'.padEnd(26)} ${describeCount({ right, of: wanted })}`);
+  print(`  ${'false pairs'.padEnd(26)} ${String(falsePairs.length).padStart(5)}`);
+  scores.mistakes.push(
+    ...missed.map((pair) => `copies not found: ${pair}`),
+    ...falsePairs.map((pair) => `no copies: ${pair}`),
+  );
+}
+
+function printScores({ scores, copies }: Measured, showMistakes: boolean): void {
   printTally('Class right, by quality', scores.classes);
   printTally('Class right, by group', scores.groups);
   printTally('Class right, by confidence', scores.reliability);
@@ -147,6 +185,7 @@ function printScores(scores: Scores, showMistakes: boolean): void {
     print(`  ${'recall'.padEnd(26)} ${describeCount({ right, of: wanted })}`);
     print(`  ${'F1'.padEnd(26)} ${((2 * right) / Math.max(1, found + wanted)).toFixed(3)}`);
   }
+  printDuplicates(copies, scores);
   if (showMistakes && scores.mistakes.length > 0) {
     print('\nMistakes');
     for (const mistake of [...scores.mistakes].sort()) print(`  ${mistake}`);

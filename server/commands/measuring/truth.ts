@@ -21,6 +21,7 @@ const documentSchema = paperSchema.extend(dateSchema.shape).extend({
   supersedes: z.string().nullish(),
 });
 const spanSchema = paperSchema.extend(dateSchema.shape).extend({
+  duplicateOf: z.string().nullish(),
   from: z.number().int(),
   to: z.number().int(),
 });

@@ -101,3 +101,24 @@ export async function listFirstPages(
     ]),
   );
 }
+
+/** How sure the reader was of the letters of papers, by paper id: the mean of their printed pages. */
+export async function listLegibility(
+  paperIds: string[],
+  transaction?: Transaction,
+): Promise<Map<string, number>> {
+  if (paperIds.length === 0) return new Map();
+  const pages = await PageModel.findAll({
+    where: { paperId: { [Op.in]: paperIds }, blank: false },
+    attributes: ['paperId', 'source', 'confidence'],
+    transaction: transaction ?? null,
+  });
+  const sums = new Map<string, { sum: number; count: number }>();
+  for (const { paperId, source, confidence } of pages) {
+    if (paperId === null) continue;
+    const { sum, count } = sums.get(paperId) ?? { sum: 0, count: 0 };
+    const own = source === 'text-layer' ? 1 : confidence;
+    sums.set(paperId, { sum: sum + own, count: count + 1 });
+  }
+  return new Map([...sums].map(([id, { sum, count }]) => [id, sum / count]));
+}

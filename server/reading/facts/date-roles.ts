@@ -83,7 +83,9 @@ function findColumnEdge(date: RoledDate): number {
 
 /** A label at the end of the line before, when the date begins its line (running text). */
 function scoreWrapped(date: RoledDate, label: LabelSpot): number {
-  if (label.line.index !== date.line.index - 1 || date.start > 2) return 0;
+  if (label.line.index !== date.line.index - 1) return 0;
+  const lead = date.line.text.slice(0, date.start);
+  if (date.start > 2 && !/^[£$€]\s?[\d,.]+\s*$/.test(lead)) return 0;
   const rest = label.line.text.length - label.end;
   return rest <= 3 ? label.strength * 0.9 : 0;
 }

@@ -14,6 +14,7 @@ import {
   assessPaper,
   loadAssessContext,
 } from '../assess-paper.ts';
+import { markLikelyCopies } from './mark-copies.ts';
 
 export interface ReadScan {
   scan: { id: string; householdId: string; boxId: string };
@@ -74,7 +75,9 @@ export async function createPapersFromReading(
       transaction,
     );
   }
-  return papers.map((paper) => paper.id);
+  const ids = papers.map((paper) => paper.id);
+  await markLikelyCopies(scan.householdId, ids, papers, transaction);
+  return ids;
 }
 
 function paperOfReading(
