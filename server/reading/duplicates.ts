@@ -5,7 +5,6 @@ import { splitTokens } from './classify/tokens.ts';
 export interface ComparedPaper {
   id: string;
   text: string;
-  class: string;
   keyDate: IsoDate | null;
   /** All days that the paper is known to show, the key date among them. */
   dates: readonly IsoDate[];

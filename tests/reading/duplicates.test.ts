@@ -13,7 +13,6 @@ function paper(id: string, text: string, more: Partial<ComparedPaper> = {}): Com
   return {
     id,
     text,
-    class: 'utility-bill',
     keyDate: null,
     dates: [],
     reference: null,

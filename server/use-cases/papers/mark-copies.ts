@@ -60,7 +60,6 @@ function toCompared(paper: StoredPaper, legibility: number): ComparedPaper {
   return {
     id,
     text,
-    class: paper.class,
     keyDate,
     reference,
     dates: Object.values(facts.dates).flatMap((date) => (date ? [date.value] : [])),
