@@ -2,12 +2,12 @@
 import { createServer } from 'node:http';
 import { createApp } from './app.ts';
 import { loadConfigOrExit } from './config.ts';
-import { openDeps, stopOnSignal } from './start-parts.ts';
+import { openDepsOrExit, stopOnSignal } from './start-parts.ts';
 import { sweepIncoming } from './storage/upload-receiver.ts';
 import { sweepLeftovers } from './use-cases/scans/sweep-leftovers.ts';
 
 const config = loadConfigOrExit();
-const deps = await openDeps(config, { supervise: false });
+const deps = await openDepsOrExit(config, { supervise: false });
 const app = createApp(deps);
 const server = createServer(app.express);
 

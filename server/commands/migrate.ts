@@ -4,6 +4,7 @@
  */
 import { Client } from 'pg';
 import { loadConfigOrExit, loadDatabaseUrlOrExit } from '../config.ts';
+import { describeDatabaseFailure } from '../db/describe-failure.ts';
 import { migrate } from '../db/migrate.ts';
 
 const oldestVersion = 15;
@@ -24,12 +25,16 @@ process.exit(0);
 
 async function requireVersion(url: string): Promise<void> {
   const client = new Client({ connectionString: url, connectionTimeoutMillis: 10_000 });
+  // A connection that breaks ends in the query's failure, not in a trace.
+  client.on('error', () => undefined);
   await client.connect();
   try {
     const { rows } = await client.query<{ server_version_num: string }>('show server_version_num');
     const major = Math.floor(Number(rows[0]?.server_version_num ?? 0) / 10_000);
     if (major < oldestVersion) {
-      throw new Error(`PostgreSQL ${major} is too old; ${oldestVersion} or newer is needed.`);
+      throw new Error(
+        `PostgreSQL ${major} is too old. Set DATABASE_URL to one of version ${oldestVersion} or newer.`,
+      );
     }
   } finally {
     await client.end();
@@ -37,12 +42,9 @@ async function requireVersion(url: string): Promise<void> {
 }
 
 function describeFailure(error: unknown): string {
-  const { code, message } = error as { code?: string; message?: string };
-  if (code === 'ECONNREFUSED' || code === 'ENOTFOUND' || code === 'ETIMEDOUT') {
-    return 'The database does not answer. Start Slackwater with "npm start", or check DATABASE_URL.';
-  }
-  if (code === '28P01') return 'The database refuses the password in DATABASE_URL.';
-  if (code === '3D000')
-    return 'The database named in DATABASE_URL does not exist. Create it first.';
-  return `The database could not be migrated: ${message ?? String(error)}`;
+  const { message } = error as { message?: string };
+  return (
+    describeDatabaseFailure(error) ??
+    `The database could not be migrated: ${message ?? String(error)}`
+  );
 }

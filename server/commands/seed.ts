@@ -6,7 +6,7 @@ import { loadConfigOrExit } from '../config.ts';
 import { hasUsers } from '../db/repositories/user-repository.ts';
 import { createPageReader } from '../reading/page-reader.ts';
 import { readingLimitsOf } from '../reading/pages/limits.ts';
-import { openDeps } from '../start-parts.ts';
+import { openDepsOrExit } from '../start-parts.ts';
 import { seedDemo } from './demo/demo.ts';
 
 const config = loadConfigOrExit();
@@ -14,7 +14,7 @@ if (config.isProduction) {
   console.error('The demo is not for production: its sign-ins are known to everybody.');
   process.exit(1);
 }
-const deps = await openDeps({ ...config, logLevel: 'warn' }, { supervise: false });
+const deps = await openDepsOrExit({ ...config, logLevel: 'warn' }, { supervise: false });
 const isTaken = await hasUsers();
 if (isTaken) {
   if (!process.argv.includes('--if-empty')) {

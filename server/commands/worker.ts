@@ -1,9 +1,9 @@
 /** `npm run worker`: a reader by itself; it also sends mail and reminders. */
 import { loadConfigOrExit } from '../config.ts';
 import { startWorker } from '../jobs/worker.ts';
-import { openDeps, stopOnSignal } from '../start-parts.ts';
+import { openDepsOrExit, stopOnSignal } from '../start-parts.ts';
 
-const deps = await openDeps(loadConfigOrExit(), { supervise: true });
+const deps = await openDepsOrExit(loadConfigOrExit(), { supervise: true });
 const worker = await startWorker(deps);
 deps.log.info('worker ready');
 

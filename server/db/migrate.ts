@@ -13,6 +13,17 @@ export interface Migration {
   up(context: MigrationContext): Promise<void>;
 }
 
+/** Names of migrations that a database has not seen; all of them when it is empty. */
+export async function listPendingMigrations(sequelize: Sequelize): Promise<string[]> {
+  const [[found]] = (await sequelize.query(`select to_regclass('migrations') as "table"`)) as [
+    { table: string | null }[],
+    unknown,
+  ];
+  const rows = found?.table ? (await sequelize.query('select name from migrations'))[0] : [];
+  const applied = new Set((rows as { name: string }[]).map(({ name }) => name));
+  return migrations.map(({ name }) => name).filter((name) => !applied.has(name));
+}
+
 /** One process migrates at a time; any number fixed for this application. */
 const lockKey = 727_104;
 
