@@ -8,7 +8,7 @@ import { findAdvice } from './advice.ts';
 import { combineOutcomes } from './combine.ts';
 import type { Verdict } from './combine.ts';
 import type { CountedRoles } from './conditions.ts';
-import { appliesTo } from './conditions.ts';
+import { appliesTo, countedAsPrivate, countedAsUsed } from './conditions.ts';
 import type { KnownKinds } from './conditions.ts';
 import { nextDay, wordDay } from './dates.ts';
 import { evaluateRule } from './evaluate-rule.ts';
@@ -167,8 +167,12 @@ function listApplied(says: readonly Say[]): AppliedRule[] {
   return applied;
 }
 
+/** Each assumption once; that a paper is private is no assumption when another rule counted it as used. */
 function unique(texts: readonly string[]): string[] {
-  return texts.length < 2 ? [...texts] : [...new Set(texts)];
+  if (texts.length < 2) return [...texts];
+  const said = new Set(texts);
+  if (said.has(countedAsUsed)) said.delete(countedAsPrivate);
+  return [...said];
 }
 
 /**

@@ -3,8 +3,13 @@ import type { CaseInputs, CaseRole } from '../contract/cases.ts';
 import type { InputName } from './moments.ts';
 import type { ConditionValue, Rule } from './rule-schema.ts';
 
+/** What is assumed of a paper of which nobody said whether a return used it. */
+export const countedAsUsed = 'Whether it was used for a tax return is not known: counted as used.';
+export const countedAsPrivate =
+  'Whether it was used for a tax return is not known: counted as private.';
+
 const flagQuestions: Partial<Record<InputName, string>> = {
-  usedForTax: 'Whether it was used for a tax return is not known: counted as used.',
+  usedForTax: countedAsUsed,
   vatRegistered: 'Whether the business was registered for VAT is not known: counted as registered.',
   deducted: 'Whether it was deducted from tax is not known: counted as deducted.',
   workExpense: 'Whether it was a work expense is not known: counted as one.',
@@ -53,13 +58,13 @@ function meetsCondition(value: unknown, condition: ConditionValue): Answer {
     case 'not-no':
       return value === false || value === null ? 'no' : 'yes';
     case 'unknown':
-      return value === undefined ? 'yes' : 'no';
+      return value === undefined ? 'assumed' : 'no';
   }
 }
 
 /** Said when a rule was left out because its answer is not known and the common case is that it does not hold. */
 const unlikelyNotes: Partial<Record<InputName, string>> = {
-  usedForTax: 'Whether it was used for a tax return is not known: counted as private.',
+  usedForTax: countedAsPrivate,
   oneStopShop: 'Whether the sale went through the one-stop shop is not known: counted as not.',
 };
 

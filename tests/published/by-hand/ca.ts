@@ -122,6 +122,18 @@ export const caHand: HandCases[] = [
         '2024-12-31',
       ],
       [
+        'statement of an individual, use not known: counts as used',
+        'bank-statement',
+        { ...person, documentDate: '2018-03-31', filedOn: '2019-04-12' },
+        '2024-12-31',
+      ],
+      [
+        'and open while the filing is not known either',
+        'bank-statement',
+        { ...person, documentDate: '2018-03-31' },
+        'open',
+      ],
+      [
         'loss carried forward to 2020',
         'investment-statement',
         { ...person, disposedOn: '2016-05-05', taxYear: 2020, filedOn: '2021-04-12' },
