@@ -57,10 +57,7 @@ export async function runKillRounds(options: {
   seed: number;
   pile: string[];
 }): Promise<KillReport> {
-  const uploadsDir = mkdtempSync(path.join(os.tmpdir(), 'slackwater-kills-'));
-  const cluster = await startThrowawayCluster();
-  const stage = await setUp(cluster, uploadsDir);
-  try {
+  return onStage(async (stage, uploadsDir) => {
     let server = await startServer(stage);
     const calm = await readInPeace(stage, options.pile);
 
@@ -75,7 +72,7 @@ export async function runKillRounds(options: {
       const worker = await startWorker(stage);
       await pause(random() * 1800);
       if (round % 5 === 1) {
-        await cluster.crash();
+        await stage.cluster.crash();
         report.databaseCrashes += 1;
         await eventually(() => isWell(stage), 'the server well after the database came back');
         await pause(random() * 1500);
@@ -102,6 +99,45 @@ export async function runKillRounds(options: {
       stormy: await describeReading(practice.householdId),
       strayFiles: await findStrayFiles(uploadsDir, practice.householdId),
     };
+  });
+}
+
+/** One worker reads a pile while the database dies under it; nobody starts the worker again. */
+export async function outliveDatabase(
+  pile: string[],
+  crashes: number,
+): Promise<{ calm: Reading; stormy: Reading }> {
+  return onStage(async (stage) => {
+    await startServer(stage);
+    const calm = await readInPeace(stage, pile);
+    const practice = await addPractice('storm');
+    const { visitor, boxId } = await openBox(stage, practice);
+    await visitor.upload(boxId, pile.map(loadFile));
+    await startWorker(stage);
+    for (let crash = 0; crash < crashes; crash += 1) {
+      const before = await countPages(practice.householdId);
+      await eventually(
+        async () => (await countPages(practice.householdId)) > before,
+        'another page read',
+      );
+      await stage.cluster.crash();
+      await eventually(() => isWell(stage), 'the server well after the database came back');
+    }
+    await eventually(
+      async () => (await countUnread(practice.householdId)) === 0,
+      'everything read by the worker that was there',
+    );
+    return { calm, stormy: await describeReading(practice.householdId) };
+  });
+}
+
+/** A database, a folder and processes of their own, all gone afterwards. */
+async function onStage<T>(work: (stage: Stage, uploadsDir: string) => Promise<T>): Promise<T> {
+  const uploadsDir = mkdtempSync(path.join(os.tmpdir(), 'slackwater-kills-'));
+  const cluster = await startThrowawayCluster();
+  const stage = await setUp(cluster, uploadsDir);
+  try {
+    return await work(stage, uploadsDir);
   } finally {
     for (const part of stage.parts) part.kill('SIGKILL');
     await stage.database.close();
@@ -218,6 +254,14 @@ async function isWell({ url }: Stage): Promise<boolean> {
     ({ status }) => status === 200,
     () => false,
   );
+}
+
+async function countPages(householdId: string): Promise<number> {
+  const rows = await selectRows<{ count: number }>(
+    'select count(*)::int as count from pages where household_id = $householdId',
+    { householdId },
+  );
+  return rows[0]?.count ?? 0;
 }
 
 async function countUnread(householdId: string): Promise<number> {

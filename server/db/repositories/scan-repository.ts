@@ -113,22 +113,23 @@ export async function requeueScan(id: string, transaction: Transaction): Promise
 
 /** Scans that wait to be read or whose reading was interrupted and that no job waits for, oldest first. */
 export function listUnreadScanIds(): Promise<string[]> {
-  return listUnreadWithoutJob(['created', 'retry']);
+  // A job that waits out its delay is not waited for: whoever starts a worker wants to see it work.
+  return listUnreadWithoutJob(`j.state in ('created', 'retry') and j.start_after <= now()`);
 }
 
 /** Unread scans that no job waits for and none is at. */
 export function listStrandedScanIds(): Promise<string[]> {
-  return listUnreadWithoutJob(['created', 'retry', 'active']);
+  return listUnreadWithoutJob(`j.state in ('created', 'retry', 'active')`);
 }
 
-async function listUnreadWithoutJob(jobStates: string[]): Promise<string[]> {
+async function listUnreadWithoutJob(isLive: string): Promise<string[]> {
   const rows = await requireSequelize().query<{ id: string }>(
     `select s.id from scans s
      where s.status in ('waiting', 'reading')
        and not exists (select 1 from jobs.job j where j.name = 'read-scan'
-         and j.state::text = any($jobStates::text[]) and j.data ->> 'scanId' = s.id::text)
+         and ${isLive} and j.data ->> 'scanId' = s.id::text)
      order by s.created_at`,
-    { bind: { jobStates }, type: QueryTypes.SELECT },
+    { type: QueryTypes.SELECT },
   );
   return rows.map((row) => row.id);
 }
