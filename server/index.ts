@@ -21,14 +21,7 @@ server.on('error', (error: NodeJS.ErrnoException) => {
   process.stderr.write(`${sentence}\n`);
   process.exit(1);
 });
-server.listen(config.port, config.host, () => {
-  deps.log.info({ host: config.host, port: config.port }, 'listening');
-});
-const anHourMs = 60 * 60 * 1000;
-await sweepIncoming(config.uploadsDir, anHourMs, deps.clock.now());
-const swept = await sweepLeftovers(deps);
-if (swept > 0) deps.log.info({ swept }, 'files of a killed process removed');
-
+// Before anybody is told that it listens: who was told may ask it to stop.
 stopOnSignal(async () => {
   await new Promise<void>((resolve) => {
     server.close(() => resolve());
@@ -38,3 +31,10 @@ stopOnSignal(async () => {
   await app.close();
   await deps.close();
 });
+server.listen(config.port, config.host, () => {
+  deps.log.info({ host: config.host, port: config.port }, 'listening');
+});
+const anHourMs = 60 * 60 * 1000;
+await sweepIncoming(config.uploadsDir, anHourMs, deps.clock.now());
+const swept = await sweepLeftovers(deps);
+if (swept > 0) deps.log.info({ swept }, 'files of a killed process removed');

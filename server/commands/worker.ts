@@ -5,9 +5,8 @@ import { openDepsOrExit, stopOnSignal } from '../start-parts.ts';
 
 const deps = await openDepsOrExit(loadConfigOrExit(), { supervise: true });
 const worker = await startWorker(deps);
-deps.log.info('worker ready');
-
 stopOnSignal(async () => {
   await worker.stop();
   await deps.close();
 });
+deps.log.info('worker ready');

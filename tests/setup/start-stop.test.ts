@@ -1,4 +1,6 @@
 /** Server and worker on a bad day: one clear sentence and exit status 1; and what they leave when they are stopped. */
+import { spawn } from 'node:child_process';
+import { once } from 'node:events';
 import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import net from 'node:net';
 import type { AddressInfo } from 'node:net';
@@ -25,17 +27,38 @@ afterAll(async () => {
   rmSync(folder, { recursive: true, force: true });
 });
 
+function environment(env: Record<string, string> = {}): NodeJS.ProcessEnv {
+  return {
+    PATH: process.env.PATH,
+    DATABASE_URL: database.url,
+    SESSION_SECRET: 'only for tests, never anywhere else',
+    UPLOADS_DIR: folder,
+    PORT: '0',
+    LOG_LEVEL: 'warn',
+    ...env,
+  };
+}
+
+/** Starts a part, waits until it says that it is ready, and ends it with a signal. */
+async function startAndEnd(file: string, ready: RegExp, signal: NodeJS.Signals) {
+  const child = spawn(process.execPath, tsxArgs(file), {
+    env: environment({ LOG_LEVEL: 'info' }),
+    stdio: ['ignore', 'pipe', 'pipe'],
+  });
+  let output = '';
+  const ended = once(child, 'exit');
+  for (const stream of [child.stdout, child.stderr]) {
+    stream.on('data', (chunk: Buffer) => {
+      if (!ready.test(output) && ready.test((output += chunk.toString('utf8')))) child.kill(signal);
+    });
+  }
+  const [code, by] = (await ended) as [number | null, string | null];
+  return { code, by, said: ready.test(output) };
+}
+
 async function start(file: string, env: Record<string, string> = {}) {
   const { code, output } = await run(process.execPath, tsxArgs(file), {
-    env: {
-      PATH: process.env.PATH,
-      DATABASE_URL: database.url,
-      SESSION_SECRET: 'only for tests, never anywhere else',
-      UPLOADS_DIR: folder,
-      PORT: '0',
-      LOG_LEVEL: 'warn',
-      ...env,
-    },
+    env: environment(env),
   });
   return { code, lines: output.trim().split('\n') };
 }
@@ -98,6 +121,15 @@ describe.each(Object.entries(parts))('the %s', (_name, file) => {
     for (const name of ['DATABASE_URL', 'SESSION_SECRET', 'SMTP_URL', 'PUBLIC_URL']) {
       expect(lines.filter((line) => line.includes(`${name} is missing`))).toHaveLength(1);
     }
+  });
+});
+
+describe.each([
+  ['server', parts.server, /"listening"/],
+  ['worker', parts.worker, /"worker ready"/],
+])('asked to stop, the %s', (_name, file, ready) => {
+  test.each(['SIGTERM', 'SIGINT'] as const)('ends by itself after %s', async (signal) => {
+    expect(await startAndEnd(file, ready, signal)).toEqual({ code: 0, by: null, said: true });
   });
 });
 
