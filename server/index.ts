@@ -8,6 +8,11 @@ import { sweepLeftovers } from './use-cases/scans/sweep-leftovers.ts';
 
 const config = loadConfigOrExit();
 const deps = await openDepsOrExit(config, { supervise: false });
+const anHourMs = 60 * 60 * 1000;
+await sweepIncoming(config.uploadsDir, anHourMs, deps.clock.now());
+const swept = await sweepLeftovers(deps);
+if (swept > 0) deps.log.info({ swept }, 'files of a killed process removed');
+
 const app = createApp(deps);
 const server = createServer(app.express);
 
@@ -34,7 +39,3 @@ stopOnSignal(async () => {
 server.listen(config.port, config.host, () => {
   deps.log.info({ host: config.host, port: config.port }, 'listening');
 });
-const anHourMs = 60 * 60 * 1000;
-await sweepIncoming(config.uploadsDir, anHourMs, deps.clock.now());
-const swept = await sweepLeftovers(deps);
-if (swept > 0) deps.log.info({ swept }, 'files of a killed process removed');
