@@ -69,6 +69,16 @@ export async function listMails(
   return { rows, total: await MailModel.count({ where: { practiceId } }) };
 }
 
+/** Who was told of what in a household, as "user key": saves trying to take up again what is on record. */
+export async function listTakenKeys(householdId: string): Promise<Set<string>> {
+  const rows = await ReminderModel.findAll({
+    attributes: ['userId', 'key'],
+    where: { householdId },
+    raw: true,
+  });
+  return new Set(rows.map(({ userId, key }) => `${userId} ${key}`));
+}
+
 /** Takes reminders up for a person; answers only those that nobody had taken up before. */
 export async function claimReminders(
   candidates: Pick<

@@ -5,7 +5,11 @@
 import { listDatedPapers } from '../../db/repositories/dated-paper-repository.ts';
 import { listAllHouseholds } from '../../db/repositories/all-households-repository.ts';
 import type { HouseholdRow } from '../../db/models/household-model.ts';
-import { claimReminders, linkReminders } from '../../db/repositories/mail-repository.ts';
+import {
+  claimReminders,
+  linkReminders,
+  listTakenKeys,
+} from '../../db/repositories/mail-repository.ts';
 import { listMembers, practiceNames } from '../../db/repositories/user-repository.ts';
 import { inTransaction, type Transaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
@@ -53,10 +57,11 @@ async function findDue(
   { clock }: ReminderDeps,
 ): Promise<Map<string, DueHere>> {
   const today = clock.todayIn(household.timeZone);
-  const [papers, members, names] = await Promise.all([
+  const [papers, members, names, taken] = await Promise.all([
     listDatedPapers(household.id),
     listMembers(household, today),
     practiceNames([household.practiceId]),
+    listTakenKeys(household.id),
   ]);
   const candidates = dueReminders({
     papers,
@@ -67,7 +72,10 @@ async function findDue(
       name: member.user.name,
       membership: member.membership,
     })),
-  }).filter((candidate) => mayBeTold(candidate, papers));
+  }).filter(
+    (candidate) =>
+      mayBeTold(candidate, papers) && !taken.has(`${candidate.userId} ${candidate.key}`),
+  );
   const due = new Map<string, DueHere>();
   for (const candidate of candidates) {
     const entry = due.get(candidate.userId) ?? {
