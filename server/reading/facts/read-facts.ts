@@ -1,9 +1,9 @@
 /** All facts of one paper, once its class is known. */
-import type { Facts } from '../../contract/readings.ts';
+import type { Facts, TextFact } from '../../contract/readings.ts';
 import { findAddressee } from './addressee.ts';
 import { findAmounts } from './amounts.ts';
 import { findRoledDates } from './date-roles.ts';
-import { findIssuer } from './issuer.ts';
+import { findEmployer, findIssuer, findUsualIssuer } from './issuer.ts';
 import { keyDateFor } from './key-date.ts';
 import { findMrz } from './mrz.ts';
 import type { PaperLine } from './paper-lines.ts';
@@ -32,6 +32,18 @@ export function decideDayFirst(lines: readonly PaperLine[], country: string | nu
   }
   if (dayFirst !== monthFirstCount) return dayFirst > monthFirstCount;
   return !monthFirst.has(country ?? '');
+}
+
+/** Printed names first, but for papers that only one authority issues and yearly slips of an employer. */
+function decideIssuer(
+  lines: readonly PaperLine[],
+  classId: string,
+  country: string | null,
+): TextFact | null {
+  const printed = findIssuer(lines);
+  if (classId === 'annual-pay-statement') return findEmployer(lines) ?? printed;
+  if (printed && printed.confidence > 0.85) return printed;
+  return findUsualIssuer(classId, country) ?? printed;
 }
 
 /**
@@ -63,7 +75,7 @@ export function readFacts(
     keyDate: null,
     taxYear,
     reference: findReference(lines),
-    issuer: findIssuer(lines),
+    issuer: decideIssuer(lines, classId, country),
     addressee: findAddressee(lines),
     amounts: findAmounts(lines, country ?? homeCountry),
     mrz,

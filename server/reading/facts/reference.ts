@@ -16,15 +16,23 @@ const patterns = kinds.map(
   (kind) => new RegExp(`(?<![a-zà-ÿ])${kind}(?![a-zà-ÿ])\\s*[:.]?\\s*`, 'gi'),
 );
 const avoid =
-  /phone|tel\b|fax|mobile|vat|sort code|routing|page|serial|ein\b|company (?:no|number)|registered (?:no|number)|registration (?:no|number) gb|charity/i;
+  /omb|phone|tel\b|fax|mobile|vat|sort code|routing|page|serial|ein\b|company (?:no|number)|registered (?:no|number)|registration (?:no|number) gb|charity/i;
 const value =
   /^[:#\s]*([A-Z0-9](?:[A-Z0-9/.-]*[A-Z0-9])?(?:\s[A-Z0-9/-]*\d[A-Z0-9/-]*|\s[A-Z]{1,2}(?=$|\s\d)){0,4})/;
 
+/** A date that follows a number on its line is not part of it: "30417 18/12/2025", "0093 25 June". */
+function cutDate(found: string, rest: string): string {
+  const plain = found.replace(/\s\d{1,2}[/.-]\d{1,2}[/.-]\d{2,4}.*$/, '');
+  const isDay = /^\s*(?:st|nd|rd|th)?\s*[A-Z][a-z]{2,8}\s+(?:19|20)\d{2}/.test(rest);
+  return isDay ? plain.replace(/\s\d{1,2}$/, '') : plain;
+}
+
 function findValue(text: string): string | null {
   const match = value.exec(text);
-  const found = match?.[1]?.trim();
+  const found = match?.[1] ? cutDate(match[1].trim(), text.slice(match[0].length)) : undefined;
   if (!found || !/\d/.test(found) || found.replace(/\W/g, '').length < 3) return null;
   if (/^\d{1,2}[/.-]\d{1,2}[/.-]\d{2,4}$/.test(found)) return null;
+  if (/^\d{1,3}(?:,?\d{3})*\.\d{2}$/.test(found)) return null;
   return found.length > 28 ? (found.split(' ')[0] ?? null) : found;
 }
 

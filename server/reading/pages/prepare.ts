@@ -118,7 +118,7 @@ export interface ReadingImage {
 }
 
 /** Letters this high (in pixels, median of all marks) are read best and fast. */
-const LETTER_TARGET = Number(process.env.LT ?? 15);
+const LETTER_TARGET = 15;
 const MAX_READING_PIXELS = 9_000_000;
 
 /** Cuts out, straightens, scales and evens out what the engine is to read. */
@@ -136,11 +136,7 @@ export function makeReadingImage(page: PreparedPage): ReadingImage {
     scaleAndShift(scale, content.left, content.top),
   );
   const sampled = sampleGrey(page.grey, map, width, height);
-  const grey = page.twoTone
-    ? process.env.NOFAX
-      ? sampled
-      : cleanFax(sampled)
-    : flattenLight(sampled);
+  const grey = page.twoTone ? cleanFax(sampled) : flattenLight(sampled);
   return { grey, scale, left: content.left, top: content.top };
 }
 

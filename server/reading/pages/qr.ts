@@ -19,36 +19,67 @@ export function findCode(flat: Grey): string | null {
 }
 
 /**
- * Whether rows show the 1:1:3:1:1 pattern of a QR code's corner squares (ISO/IEC 18004) often enough to
- * be worth a full search; pages of print hardly do.
+ * Whether the corner squares of a QR code (ISO/IEC 18004: dark and light runs as 1:1:3:1:1, across and
+ * down) stand on the page, so that a full search is worth its time. Print hardly shows them both ways.
  */
 function hasFinderPattern(grey: Grey): boolean {
+  const { width, height, data } = grey;
+  const runs = new Int32Array(5);
   let hits = 0;
-  for (let y = 0; y < grey.height; y += 2) {
-    const runs: number[] = [];
-    let dark = false;
+  for (let y = 0; y < height; y += 2) {
+    const row = y * width;
     let length = 0;
-    const row = y * grey.width;
-    for (let x = 0; x < grey.width; x++) {
-      const isDark = grey.data[row + x]! < 128;
-      if (isDark === dark) {
+    let dark = false;
+    let seen = 0;
+    for (let x = 0; x <= width; x++) {
+      const isDark = x < width && data[row + x]! < 128;
+      if (isDark === dark && x < width) {
         length++;
         continue;
       }
-      runs.push(length);
+      runs.copyWithin(0, 1);
+      runs[4] = length;
+      seen++;
+      // A dark run just ended: five runs may be dark, light, dark, light, dark.
+      if (dark && seen >= 5 && isFinder(runs)) {
+        const centre = x - runs[4]! - runs[3]! - (runs[2]! >> 1) - 1;
+        if (crossesDown(grey, centre, y, runs[2]! / 3) && ++hits >= 4) return true;
+      }
       dark = isDark;
       length = 1;
     }
-    // Odd places in `runs` are dark.
-    for (let i = 1; i + 4 < runs.length; i += 2) {
-      const five = runs.slice(i, i + 5);
-      const unit = five.reduce((sum, run) => sum + run, 0) / 7;
-      if (unit < 1.6) continue;
-      const fits = five.every(
-        (run, index) => Math.abs(run - (index === 2 ? 3 : 1) * unit) < unit * 0.8,
-      );
-      if (fits) hits++;
-    }
   }
-  return hits >= 6;
+  return false;
+}
+
+function isFinder(runs: Int32Array): boolean {
+  const unit = (runs[0]! + runs[1]! + runs[2]! + runs[3]! + runs[4]!) / 7;
+  if (unit < 1.6) return false;
+  const most = unit * 0.8;
+  for (let i = 0; i < 5; i++) {
+    if (Math.abs(runs[i]! - (i === 2 ? 3 : 1) * unit) >= most) return false;
+  }
+  return true;
+}
+
+/** The same runs from the centre up and down: half the inner square, a light ring, a dark ring. */
+function crossesDown(grey: Grey, x: number, y: number, unit: number): boolean {
+  const { width, height, data } = grey;
+  let inner = 0;
+  for (const step of [-1, 1]) {
+    let at = y;
+    const count = (dark: boolean, most: number): number => {
+      let length = 0;
+      while (at >= 0 && at < height && length <= most && data[at * width + x]! < 128 === dark) {
+        length++;
+        at += step;
+      }
+      return length;
+    };
+    inner += count(true, unit * 4);
+    const light = count(false, unit * 2.2);
+    const ring = count(true, unit * 2.2);
+    if (light < unit * 0.4 || ring < unit * 0.4) return false;
+  }
+  return Math.abs(inner - 1 - 3 * unit) < unit * 1.6;
 }
