@@ -42,7 +42,7 @@ function hasFinderPattern(grey: Grey): boolean {
       seen++;
       // A dark run just ended: five runs may be dark, light, dark, light, dark.
       if (dark && seen >= 5 && isFinder(runs)) {
-        const centre = x - runs[4]! - runs[3]! - (runs[2]! >> 1) - 1;
+        const centre = x - runs[4] - runs[3]! - (runs[2]! >> 1) - 1;
         if (crossesDown(grey, centre, y, runs[2]! / 3) && ++hits >= 4) return true;
       }
       dark = isDark;
