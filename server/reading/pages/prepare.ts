@@ -1,6 +1,7 @@
 /** From a page as it lies in the file to an evened-out, upright page and the maps between the two. */
 import { cleanFax } from './fax-clean.ts';
 import { flattenLight } from './flatten.ts';
+import { isWhiteToTheEdge } from './frame-edge.ts';
 import { liesOnSide } from './orientation.ts';
 import { measurePage, scaleShape, type PageShape } from './page-shape.ts';
 import { countGreys, toGrey, turnGrey, type Grey, type Pixels } from './raster.ts';
@@ -53,7 +54,7 @@ const SMALL_SIDE = 1600;
 export function preparePage(source: Pixels): PreparedPage {
   const twoTone = isTwoTone(source);
   const grey = toGrey(source);
-  const corners = twoTone ? null : findSheet(source);
+  const corners = twoTone || isWhiteToTheEdge(grey) ? null : findSheet(source);
   const frame = corners ? measureCorners(corners) : { width: grey.width, height: grey.height };
   const toSource = corners ? mapToCorners(corners, frame.width, frame.height) : identityMap;
   const smallScale = Math.min(1, SMALL_SIDE / Math.max(frame.width, frame.height));
