@@ -92,7 +92,42 @@ export function isSoundLayer(words: Word[], pixels: Pixels): boolean {
   if (odd > text.length * 0.02) return false;
   if (!looksLikeLanguage(words)) return false;
   const inked = words.filter((word) => hasInk(word, pixels)).length;
-  return inked >= words.length * 0.92;
+  return inked >= words.length * 0.92 && shareCovered(words, pixels) >= LEAST_COVERED;
+}
+
+/** A line that a scanner wrote under its picture is sound as far as it goes, and leaves out the page. */
+const LEAST_COVERED = 0.2;
+const CELL = 16;
+
+/** Of all small squares of the page that hold print, the share that the words of the layer stand in. */
+export function shareCovered(words: Word[], pixels: Pixels): number {
+  const columns = Math.ceil(pixels.width / CELL);
+  const rows = Math.ceil(pixels.height / CELL);
+  const isWord = new Uint8Array(columns * rows);
+  for (const { box } of words) {
+    const right = Math.min(columns - 1, Math.floor(((box.x + box.w) * pixels.width) / CELL));
+    const bottom = Math.min(rows - 1, Math.floor(((box.y + box.h) * pixels.height) / CELL));
+    for (let row = Math.max(0, Math.floor((box.y * pixels.height) / CELL)); row <= bottom; row++) {
+      const left = Math.max(0, Math.floor((box.x * pixels.width) / CELL));
+      if (right >= left) isWord.fill(1, row * columns + left, row * columns + right + 1);
+    }
+  }
+  let printed = 0;
+  let covered = 0;
+  for (let row = 0; row < rows; row++) {
+    for (let column = 0; column < columns; column++) {
+      const box = {
+        x: (column * CELL) / pixels.width,
+        y: (row * CELL) / pixels.height,
+        w: CELL / pixels.width,
+        h: CELL / pixels.height,
+      };
+      if (!hasInk({ text: '', box, confidence: 1 }, pixels)) continue;
+      printed++;
+      covered += isWord[row * columns + column] ?? 0;
+    }
+  }
+  return printed === 0 ? 1 : covered / printed;
 }
 
 /** Words of letters have vowels: a scrambled layer has few such words. */
