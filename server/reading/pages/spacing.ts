@@ -19,7 +19,24 @@ export function mendSpacing(words: SeenWord[], letterHeight: number): SeenWord[]
     if (line) line.push(word);
     else lines.set(word.line, [word]);
   }
-  return [...lines.values()].flatMap((line) => joinTorn(partGlued(line, letterHeight)));
+  return [...lines.values()].flatMap((line) =>
+    joinTorn(partGlued(line, letterHeight)).flatMap(partSmallWords),
+  );
+}
+
+/** Small words that tight print runs together, and no word is spelled so. */
+const glued =
+  /^(of|to|in|is|and|for|by|on|at|with)(the|this|that|any|all|one|your|our|January|February|March|April|June|July|August|September|October|November|December)$/i;
+
+function partSmallWords(word: SeenWord): SeenWord[] {
+  const match = glued.exec(word.text);
+  const lead = match?.[1]?.length;
+  if (lead === undefined || word.symbols.map((symbol) => symbol.text).join('') !== word.text) {
+    return [word];
+  }
+  // "Atone" is a word of its own.
+  if (/^atone$/i.test(word.text)) return [word];
+  return [makeWord(word, word.symbols.slice(0, lead)), makeWord(word, word.symbols.slice(lead))];
 }
 
 function partGlued(line: SeenWord[], letterHeight: number): SeenWord[] {
